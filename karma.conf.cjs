@@ -1,0 +1,29 @@
+// CommonJS because Karma loads its configuration with require().
+const { existsSync } = require('node:fs');
+
+process.env.CHROME_BIN ??= ['/usr/bin/chromium', '/usr/bin/chromium-browser', '/usr/bin/google-chrome'].find(existsSync);
+
+module.exports = (config) =>
+  config.set({
+    frameworks: ['jasmine'],
+    plugins: [require('karma-jasmine'), require('karma-chrome-launcher')],
+    client: { jasmine: { random: true, seed: '20260', timeoutInterval: 60_000 } },
+    reporters: ['progress'],
+    browsers: ['Chromium'],
+    customLaunchers: {
+      Chromium: {
+        base: 'ChromeHeadless',
+        flags: [
+          '--no-sandbox',
+          '--disable-gpu',
+          '--disable-quic',
+          '--no-first-run',
+          '--disable-background-networking',
+          '--disable-component-update',
+          '--disable-sync',
+        ],
+      },
+    },
+    browserNoActivityTimeout: 180_000,
+    restartOnFileChange: false,
+  });

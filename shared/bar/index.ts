@@ -1,0 +1,3 @@
+export * from './bar-state.js';
+export * from './losses.js';
+export * from './section.js';
