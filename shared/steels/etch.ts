@@ -1,0 +1,188 @@
+import { nominalPercent, type EtchTone, type Source, type Steel } from './steel.js';
+
+type Etched = Pick<Steel, 'composition' | 'kind' | 'etchTone'>;
+
+/**
+ * Classes of materials in the order of darkening in dilute ferric chloride, weakest attack first.
+ * **Source**: common practice, no source. The last two stand outside the order.
+ */
+export const ETCH_CLASSES = [
+  'nickel',
+  'austenitic-stainless',
+  'chromium-stainless',
+  'high-nickel',
+  'nickel-steel',
+  'chromium-tool',
+  'phosphoric-iron',
+  'mild',
+  'half-bright',
+  'medium-carbon',
+  'high-carbon',
+  'manganese-carbon',
+  'manganese-tool',
+  'copper',
+  'fitting',
+] as const;
+export type EtchClass = (typeof ETCH_CLASSES)[number];
+
+/** Where the order of darkening and the greys come from. */
+export const ETCH_SOURCE: Source = {
+  text: 'order of darkening in dilute ferric chloride as bladesmiths know it; greys are ours',
+  status: 'common practice, no source',
+};
+
+/**
+ * The class a material etches like, from its nominal composition; its stated tone decides where the composition leaves
+ * it open (a `grey` 52100 or 9260 is no dark steel, a `bright` D2 is no A2).
+ */
+export function etchClassOf(steel: Etched): EtchClass {
+  if (steel.etchTone === 'copper-red') return 'copper';
+  if (steel.etchTone === 'n/a') return 'fitting';
+  const carbon = nominalPercent(steel, 'C');
+  const manganese = nominalPercent(steel, 'Mn');
+  const nickel = nominalPercent(steel, 'Ni');
+  const chromium = nominalPercent(steel, 'Cr');
+  if (nickel >= 50) return 'nickel';
+  if (chromium >= 10) {
+    if (nickel >= 6) return 'austenitic-stainless';
+    return steel.kind.endsWith('stainless') ? 'chromium-stainless' : 'chromium-tool';
+  }
+  if (nickel >= 3) return 'high-nickel';
+  if (nickel >= 1.2) return 'nickel-steel';
+  if (carbon < 0.25 && chromium < 3 && nickel < 0.5) {
+    return nominalPercent(steel, 'P') >= 0.2 ? 'phosphoric-iron' : 'mild';
+  }
+  if (nickel >= 0.5 || chromium >= 3) return 'half-bright';
+  if (carbon < 0.55 || steel.etchTone === 'grey') return 'medium-carbon';
+  if (manganese >= 1.2) return 'manganese-tool';
+  return manganese >= 0.8 ? 'manganese-carbon' : 'high-carbon';
+}
+
+/**
+ * Strength of the attack, from about 0.1 to 1.25. Orders steels of one class; no physical quantity.
+ * **Source**: common practice, no source: 1 − 0.9·min(1, 0.40·Ni + 0.08·max(0, Cr − 1)), and 0.25·min(1, Mn/1.2) more
+ * from 0.5 % C on.
+ */
+export function etchAttack(steel: Pick<Steel, 'composition'>): number {
+  const noble = 0.4 * nominalPercent(steel, 'Ni') + 0.08 * Math.max(0, nominalPercent(steel, 'Cr') - 1);
+  const smut = nominalPercent(steel, 'C') >= 0.5 ? 0.25 * Math.min(1, nominalPercent(steel, 'Mn') / 1.2) : 0;
+  return 1 - 0.9 * Math.min(1, noble) + smut;
+}
+
+/** Brightness of each class: a material lies between the two by {@link etchAttack}, strongest attack at the first. */
+const BRIGHTNESS: Readonly<Record<EtchClass, readonly [number, number]>> = {
+  nickel: [0.96, 1],
+  'austenitic-stainless': [0.96, 1],
+  'chromium-stainless': [0.91, 0.95],
+  'high-nickel': [0.86, 0.9],
+  'nickel-steel': [0.77, 0.85],
+  'chromium-tool': [0.72, 0.76],
+  'phosphoric-iron': [0.65, 0.71],
+  mild: [0.56, 0.64],
+  'half-bright': [0.48, 0.55],
+  'medium-carbon': [0.36, 0.47],
+  'high-carbon': [0.2, 0.32],
+  'manganese-carbon': [0.11, 0.19],
+  'manganese-tool': [0, 0.1],
+  copper: [0.6, 0.6],
+  fitting: [0.75, 0.75],
+};
+
+/**
+ * How bright a material stands in an etched surface: 0 the blackest, 1 nickel. For greys on a screen or a sheet: keeps
+ * the order of {@link ETCH_CLASSES}, says nothing about reflectance.
+ */
+export function etchBrightness(steel: Etched): number {
+  const [darkest, brightest] = BRIGHTNESS[etchClassOf(steel)];
+  const weakness = Math.min(1, Math.max(0, (1.25 - etchAttack(steel)) / 1.15));
+  return darkest + (brightest - darkest) * weakness;
+}
+
+/** Patterns of lines that tell steels apart without their greys. */
+export const HATCHES = [
+  'plain',
+  'dots',
+  'dashes',
+  'horizontal',
+  'vertical',
+  'diagonal',
+  'back-diagonal',
+  'cross',
+  'grid',
+  'zigzag',
+  'waves',
+  'rings',
+] as const;
+export type Hatch = (typeof HATCHES)[number];
+
+const HATCH: Readonly<Record<EtchClass, Hatch>> = {
+  nickel: 'dots',
+  'austenitic-stainless': 'grid',
+  'chromium-stainless': 'vertical',
+  'high-nickel': 'dashes',
+  'nickel-steel': 'plain',
+  'chromium-tool': 'vertical',
+  'phosphoric-iron': 'waves',
+  mild: 'horizontal',
+  'half-bright': 'back-diagonal',
+  'medium-carbon': 'back-diagonal',
+  'high-carbon': 'diagonal',
+  'manganese-carbon': 'cross',
+  'manganese-tool': 'zigzag',
+  copper: 'rings',
+  fitting: 'rings',
+};
+
+/** The hatch of a material, by the class it etches like: usual partners are of different classes, so they differ. */
+export function hatchOf(steel: Etched): Hatch {
+  return HATCH[etchClassOf(steel)];
+}
+
+/** How a material is drawn. */
+export interface Tone {
+  readonly name: EtchTone;
+  /** The tone in words, for screen readers and legends. */
+  readonly words: string;
+  /** 0–1, see {@link etchBrightness}. */
+  readonly brightness: number;
+  readonly hatch: Hatch;
+  /** sRGB, 0–255 each. */
+  readonly rgb: readonly [red: number, green: number, blue: number];
+  /** The same as `#rrggbb`. */
+  readonly hex: string;
+}
+
+const TONE_WORDS: Readonly<Record<EtchTone, string>> = {
+  'very-bright': 'very bright',
+  bright: 'bright',
+  grey: 'grey',
+  dark: 'dark',
+  'copper-red': 'copper red',
+  'n/a': 'not etched',
+};
+
+/** CIE lightness of the blackest and the brightest tone. Equal steps of brightness look equal. */
+const LIGHTNESS = { darkest: 16, brightest: 92 } as const;
+
+/** How a material is drawn: tone, grey (copper red for copper) and hatch. */
+export function toneOf(steel: Etched): Tone {
+  const brightness = etchBrightness(steel);
+  const grey = greyOfLightness(LIGHTNESS.darkest + (LIGHTNESS.brightest - LIGHTNESS.darkest) * brightness);
+  const rgb: Tone['rgb'] = steel.etchTone === 'copper-red' ? [184, 115, 81] : [grey, grey, grey];
+  const hex = `#${rgb.map((channel) => channel.toString(16).padStart(2, '0')).join('')}`;
+  return {
+    name: steel.etchTone,
+    words: TONE_WORDS[steel.etchTone],
+    brightness,
+    hatch: hatchOf(steel),
+    rgb,
+    hex,
+  };
+}
+
+/** sRGB channel 0–255 of a grey with CIE lightness L* (0–100). **Source**: CIE 15 (L*), IEC 61966-2-1 (sRGB). */
+function greyOfLightness(lightness: number): number {
+  const luminance = lightness > 8 ? ((lightness + 16) / 116) ** 3 : lightness / 903.2963;
+  const channel = luminance <= 0.0031308 ? 12.92 * luminance : 1.055 * luminance ** (1 / 2.4) - 0.055;
+  return Math.round(255 * channel);
+}
