@@ -52,6 +52,11 @@ export function sectionAcross(bar: BarState, axis: Axis): Section | null {
   return isSolid(bar) ? scaleSection(bar.section, extentMm(bar, axis) / bar.section.totalMm) : null;
 }
 
+/** The bar with its single layer said to lie across `axis`; any other bar is given back as it is. */
+export function solidAcross(bar: BarState, axis: Axis): BarState {
+  return isSolid(bar) && bar.lie !== axis ? { ...bar, lie: axis, section: sectionAcross(bar, axis) } : bar;
+}
+
 /** The same bar pressed to a new size: layers follow the axis they lie across. */
 export function resized(bar: BarState, lengthMm: number, widthMm: number, thicknessMm: number): BarState {
   const next = { ...bar, lengthMm, widthMm, thicknessMm };

@@ -1,0 +1,42 @@
+import { NO_LOSSES, NO_REMOVAL, cutBar, fromEveryFace, isCutShort } from '../../bar/index.js';
+import { type Fields, type StepOf, stepSchema } from '../field.js';
+import { type StepKind, refuseCut } from '../step-kind.js';
+
+const grindFields = {
+  perFaceMm: { type: 'length', label: 'Off each face', min: 0, max: 200, initial: 0.5 },
+  faces: {
+    type: 'choice',
+    label: 'Faces',
+    initial: 'flats',
+    options: [
+      { value: 'flats', label: 'The flats: top and bottom' },
+      { value: 'all', label: 'All six faces' },
+    ],
+  },
+} as const satisfies Fields;
+
+export type Grind = StepOf<'grind', typeof grindFields>;
+
+export const grind: StepKind<Grind> = {
+  kind: 'grind',
+  fields: grindFields,
+  schema: stepSchema('grind', grindFields),
+  usualHeats: 0,
+  propose: () => ({ kind: 'grind', perFaceMm: 0.5, faces: 'flats' }),
+  forge: (bar, step) => {
+    const flats = { ...NO_REMOVAL, bottom: step.perFaceMm, top: step.perFaceMm };
+    const cut = cutBar(bar, step.faces === 'flats' ? flats : fromEveryFace(step.perFaceMm));
+    if (isCutShort(cut)) return refuseCut(cut, 'perFaceMm');
+    return {
+      bar: cut.bar,
+      lossesMm3: { ...NO_LOSSES, grinding: cut.removedMm3 },
+      eatenLayers: { scale: 0, grinding: cut.eatenLayers },
+    };
+  },
+  words: {
+    name: 'Grind clean',
+    purpose: 'Grind scale and decarburised skin off the faces.',
+    instruction: (step, format) =>
+      `Grind ${format.length(step.perFaceMm)} off ${step.faces === 'flats' ? 'top and bottom' : 'all six faces'}`,
+  },
+};
