@@ -60,18 +60,21 @@ export function endChildren(signal = 'SIGTERM') {
 
 process.on('exit', () => endChildren());
 
-/** Turns Ctrl+C and a polite kill into an orderly end, children first. */
+/**
+ * Turns Ctrl+C and a polite kill into an orderly end, children first.
+ * @returns {() => void} takes that back
+ */
 export function endOnSignal() {
-  for (const [signal, code] of [
-    ['SIGINT', 130],
-    ['SIGTERM', 143],
-    ['SIGHUP', 129],
-  ]) {
-    process.on(signal, () => {
+  const codes = { SIGINT: 130, SIGTERM: 143, SIGHUP: 129 };
+  const listeners = Object.entries(codes).map(([signal, code]) => {
+    const end = () => {
       endChildren();
       process.exit(code);
-    });
-  }
+    };
+    process.on(signal, end);
+    return () => process.off(signal, end);
+  });
+  return () => listeners.forEach((remove) => remove());
 }
 
 /** Ends the process with a message for whoever gave the command. */

@@ -62,7 +62,7 @@ function stackBar(stack: Stack, steels: readonly Steel[]): BarState {
   const section = sectionOf(indexes, Float64Array.from(stack.layers, (layer) => layer.thicknessMm));
   const parts = stack.layers.map((layer, i) => ({
     densityKgM3: (steels[indexes[i] as number] as Steel).densityKgM3,
-    fraction: layer.thicknessMm / section.totalMm,
+    share: layer.thicknessMm / section.totalMm,
   }));
   return {
     lengthMm: stack.lengthMm,

@@ -69,23 +69,30 @@ export function etchAttack(steel: Pick<Steel, 'composition'>): number {
   return 1 - 0.9 * Math.min(1, noble) + smut;
 }
 
-/** Brightness of each class: a material lies between the two by {@link etchAttack}, strongest attack at the first. */
-const BRIGHTNESS: Readonly<Record<EtchClass, readonly [number, number]>> = {
-  nickel: [0.96, 1],
-  'austenitic-stainless': [0.96, 1],
-  'chromium-stainless': [0.91, 0.95],
-  'high-nickel': [0.86, 0.9],
-  'nickel-steel': [0.77, 0.85],
-  'chromium-tool': [0.72, 0.76],
-  'phosphoric-iron': [0.65, 0.71],
-  mild: [0.56, 0.64],
-  'half-bright': [0.48, 0.55],
-  'medium-carbon': [0.36, 0.47],
-  'high-carbon': [0.2, 0.32],
-  'manganese-carbon': [0.11, 0.19],
-  'manganese-tool': [0, 0.1],
-  copper: [0.6, 0.6],
-  fitting: [0.75, 0.75],
+/** Where a class of materials lies between black and bright, and the attacks that mark its ends. */
+interface Band {
+  readonly darkest: number;
+  readonly brightest: number;
+  /** {@link etchAttack} of the darkest and of the brightest in the class; what lies outside is put at the end. */
+  readonly attack: readonly [strongest: number, weakest: number];
+}
+
+const BANDS: Readonly<Record<EtchClass, Band>> = {
+  nickel: { darkest: 0.97, brightest: 1, attack: [0.35, 0.1] },
+  'austenitic-stainless': { darkest: 0.97, brightest: 1, attack: [0.35, 0.1] },
+  'chromium-stainless': { darkest: 0.91, brightest: 0.95, attack: [0.35, 0.1] },
+  'high-nickel': { darkest: 0.86, brightest: 0.9, attack: [0.35, 0.1] },
+  'nickel-steel': { darkest: 0.77, brightest: 0.85, attack: [0.75, 0.25] },
+  'chromium-tool': { darkest: 0.7, brightest: 0.75, attack: [0.5, 0.1] },
+  'phosphoric-iron': { darkest: 0.64, brightest: 0.68, attack: [1, 0.8] },
+  mild: { darkest: 0.56, brightest: 0.62, attack: [1, 0.8] },
+  'half-bright': { darkest: 0.47, brightest: 0.53, attack: [1.1, 0.5] },
+  'medium-carbon': { darkest: 0.35, brightest: 0.44, attack: [1.25, 0.9] },
+  'high-carbon': { darkest: 0.2, brightest: 0.32, attack: [1.17, 1] },
+  'manganese-carbon': { darkest: 0.11, brightest: 0.18, attack: [1.25, 1.05] },
+  'manganese-tool': { darkest: 0, brightest: 0.08, attack: [1.25, 1.05] },
+  copper: { darkest: 0.6, brightest: 0.6, attack: [1, 0] },
+  fitting: { darkest: 0.75, brightest: 0.75, attack: [1, 0] },
 };
 
 /**
@@ -93,9 +100,10 @@ const BRIGHTNESS: Readonly<Record<EtchClass, readonly [number, number]>> = {
  * the order of {@link ETCH_CLASSES}, says nothing about reflectance.
  */
 export function etchBrightness(steel: Etched): number {
-  const [darkest, brightest] = BRIGHTNESS[etchClassOf(steel)];
-  const weakness = Math.min(1, Math.max(0, (1.25 - etchAttack(steel)) / 1.15));
-  return darkest + (brightest - darkest) * weakness;
+  const { darkest, brightest, attack } = BANDS[etchClassOf(steel)];
+  const [strongest, weakest] = attack;
+  const weakness = (strongest - etchAttack(steel)) / (strongest - weakest);
+  return darkest + (brightest - darkest) * Math.min(1, Math.max(0, weakness));
 }
 
 /** Patterns of lines that tell steels apart without their greys. */

@@ -119,3 +119,48 @@ export function nominalPercent(steel: Pick<Steel, 'composition'>, element: Eleme
 export function isReclaimed(steel: Pick<Steel, 'kind'>): boolean {
   return steel.kind === 'reclaimed';
 }
+
+const KIND_WORDS: Readonly<Record<SteelKind, string>> = {
+  carbon: 'carbon steel',
+  'carbon-tool': 'carbon tool steel',
+  'cold-work-tool': 'cold-work tool steel',
+  'hot-work-tool': 'hot-work tool steel',
+  'shock-tool': 'shock-resisting tool steel',
+  'low-alloy-tool': 'low-alloy tool steel',
+  'low-alloy': 'low-alloy steel',
+  spring: 'spring steel',
+  bearing: 'bearing steel',
+  'structural-Ni': 'nickel plate steel',
+  'martensitic-stainless': 'martensitic stainless steel',
+  'austenitic-stainless': 'austenitic stainless steel',
+  iron: 'iron',
+  nickel: 'nickel',
+  reclaimed: 'reclaimed, composition unknown',
+  powder: 'steel powder',
+  'non-ferrous': 'non-ferrous metal',
+  fitting: 'metal for fittings',
+};
+
+/** A family of materials in words. */
+export function kindWords(kind: SteelKind): string {
+  return KIND_WORDS[kind];
+}
+
+const DESIGNATION_WORDS: Readonly<Record<keyof Designations, string>> = {
+  sae: 'SAE ',
+  aisi: 'AISI ',
+  uns: 'UNS ',
+  en: 'EN ',
+  wnr: '',
+  astm: 'ASTM ',
+  other: '',
+};
+
+/** The names under which a material is sold: `SAE 1084`, `UNS G10840`, `EN C85S near`, `1.1269 near`. */
+export function designationList(steel: Pick<Steel, 'designations'>): string[] {
+  const order = Object.keys(DESIGNATION_WORDS) as (keyof Designations)[];
+  return order.flatMap((system) => {
+    const name = steel.designations[system];
+    return name === undefined ? [] : [DESIGNATION_WORDS[system] + name];
+  });
+}

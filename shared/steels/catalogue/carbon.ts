@@ -1,5 +1,5 @@
 import type { Steel } from '../steel.js';
-import { memory, range, upTo, ASM_CARBON_LIMITS, FORGING_TABLES, HANDBOOK_DENSITY } from './entry.js';
+import { memory, partly, range, upTo, ASM_CARBON_LIMITS, FORGING_TABLES, HANDBOOK_DENSITY } from './entry.js';
 
 /** Plain carbon steels, mild to hypereutectoid, as bar, strip and wire. */
 export const CARBON_STEELS: readonly Steel[] = [
@@ -21,7 +21,9 @@ export const CARBON_STEELS: readonly Steel[] = [
     forging: { startMaxC: 1290, finishMinC: 800 },
     note: 'does not harden; carbon arrives by diffusion from neighbours',
     sources: {
-      composition: memory('nominal from SAE J403 / ASTM A29 family limits'),
+      composition: partly(
+        'SAE J403 / ASTM A29 family limits; C, Mn, P and S read in a public copy of ASTM A576, Si from memory',
+      ),
       density: HANDBOOK_DENSITY,
       forging: FORGING_TABLES,
     },
@@ -44,7 +46,9 @@ export const CARBON_STEELS: readonly Steel[] = [
     forging: { startMaxC: 1245, finishMinC: 800 },
     note: '',
     sources: {
-      composition: memory('SAE J403 / ASTM A29 family limits'),
+      composition: partly(
+        'SAE J403 / ASTM A29 family limits; C, Mn, P and S read in a public copy of ASTM A576, Si from memory',
+      ),
       density: HANDBOOK_DENSITY,
       forging: memory(
         'ASM Handbook forging tables; a forming-machine maker’s table gives 1200 to 800 °C for 0.45–0.60 C',
@@ -67,7 +71,7 @@ export const CARBON_STEELS: readonly Steel[] = [
     etchTone: 'dark',
     etchWhy: 'medium-high carbon and Mn: dark grey',
     forging: { startMaxC: 1180, finishMinC: 800 },
-    note: 'EN C60E limits C 0.57-0.65 from memory',
+    note: 'EN C60E limits C 0.57–0.65 from memory',
     sources: {
       composition: ASM_CARBON_LIMITS,
       density: HANDBOOK_DENSITY,
@@ -92,7 +96,7 @@ export const CARBON_STEELS: readonly Steel[] = [
     etchTone: 'dark',
     etchWhy: 'near-eutectoid, no Ni: dark',
     forging: { startMaxC: 1200, finishMinC: 800 },
-    note: 'bar limits C 0.70-0.80',
+    note: 'bar limits C 0.70–0.80',
     sources: { composition: ASM_CARBON_LIMITS, density: HANDBOOK_DENSITY, forging: FORGING_TABLES },
   },
   {
@@ -137,7 +141,7 @@ export const CARBON_STEELS: readonly Steel[] = [
     etchTone: 'dark',
     etchWhy: 'eutectoid with 0.75 Mn: dark',
     forging: { startMaxC: 1205, finishMinC: 800 },
-    note: 'bar limits C 0.75-0.88',
+    note: 'bar limits C 0.75–0.88',
     sources: { composition: ASM_CARBON_LIMITS, density: HANDBOOK_DENSITY, forging: FORGING_TABLES },
   },
   {
@@ -156,7 +160,7 @@ export const CARBON_STEELS: readonly Steel[] = [
     etchTone: 'dark',
     etchWhy: 'eutectoid plus high Mn: the usual dark partner',
     forging: { startMaxC: 1190, finishMinC: 800 },
-    note: 'trade nominal 0.84 C with up to 0.9 Mn is stated in a published bladesmithing article; bar limits C 0.80-0.93',
+    note: 'trade nominal 0.84 C with up to 0.9 Mn is stated in a published bladesmithing article; bar limits C 0.80–0.93',
     sources: { composition: ASM_CARBON_LIMITS, density: HANDBOOK_DENSITY, forging: FORGING_TABLES },
   },
   {
@@ -194,7 +198,7 @@ export const CARBON_STEELS: readonly Steel[] = [
     etchTone: 'dark',
     etchWhy: 'hypereutectoid, low Mn: dark grey, less black than 1084; shallow hardening',
     forging: { startMaxC: 1175, finishMinC: 815 },
-    note: 'bar limits C 0.90-1.03',
+    note: 'bar limits C 0.90–1.03',
     sources: { composition: ASM_CARBON_LIMITS, density: HANDBOOK_DENSITY, forging: FORGING_TABLES },
   },
   {

@@ -20,10 +20,10 @@ export const IRON_AND_NICKEL: readonly Steel[] = [
     etchTone: 'grey',
     etchWhy: 'ferrite with slag strings: light grey, fibrous, slag lines etch as pits',
     forging: { startMaxC: 1350, finishMinC: 900 },
-    note: 'work hot; splits below about 900 C. Density 7.6-7.8 g/cm³ depending on slag (one public dictionary gives 7.8)',
+    note: 'work hot; splits below about 900 °C. Density 7.6–7.8 g/cm³ depending on slag (one public dictionary gives 7.8)',
     sources: {
       composition: published(
-        'matrix C 0.03 Mn 0.05 P 0.10 S 0.02 Si 0.01 and slag 1-4 wt%: welding glossary; P 0.1-0.25, Si 0.075-0.15, Mn 0.05-0.1: encyclopaedia entry',
+        'matrix C 0.03 Mn 0.05 P 0.10 S 0.02 Si 0.01 and slag 1–4 wt%: welding glossary; P 0.1–0.25, Si 0.075–0.15, Mn 0.05–0.1: encyclopaedia entry',
       ),
       density: memory('7600–7800 depending on slag; one public dictionary gives 7800'),
       forging: memory('smithing handbooks'),
@@ -69,7 +69,7 @@ export const IRON_AND_NICKEL: readonly Steel[] = [
     etchTone: 'grey',
     etchWhy: 'pure ferrite: light grey, no pearlite',
     forging: { startMaxC: 1300, finishMinC: 900 },
-    note: 'hot-short window about 850-1050 C in some ingot irons: work above it',
+    note: 'hot-short window about 850–1050 °C in some ingot irons: work above it',
     sources: {
       composition: memory('maker data sheets'),
       density: HANDBOOK_DENSITY,

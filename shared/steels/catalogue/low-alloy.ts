@@ -30,7 +30,7 @@ export const LOW_ALLOY_STEELS: readonly Steel[] = [
     },
     densityKgM3: 7850,
     etchTone: 'bright',
-    etchWhy: '1.5-2 Ni: bright',
+    etchWhy: '1.5–2 Ni: bright',
     forging: { startMaxC: 1095, finishMinC: 845 },
     note: 'air-hardens in thin sections; anneal by slow sub-critical soak',
     sources: {
@@ -146,7 +146,7 @@ export const LOW_ALLOY_STEELS: readonly Steel[] = [
     note: '',
     sources: {
       composition: partly(
-        'EN 10132-4 from memory; minima 0.75 C / 0.4 Cr / 0.15 V / 0.3 Mn and nominal 0.8-0.5-0.15 agree with two public material lists',
+        'EN 10132-4 from memory; minima 0.75 C / 0.4 Cr / 0.15 V / 0.3 Mn and nominal 0.8/0.5/0.15 agree with two public material lists',
       ),
       density: HANDBOOK_DENSITY,
       forging: TOOL_FORGING,
@@ -169,7 +169,7 @@ export const LOW_ALLOY_STEELS: readonly Steel[] = [
     },
     densityKgM3: 7850,
     etchTone: 'grey',
-    etchWhy: '0.8-0.9 Ni: half-bright grey',
+    etchWhy: '0.8–0.9 Ni: half-bright grey',
     forging: { startMaxC: 1180, finishMinC: 830 },
     note: '',
     sources: {
@@ -248,11 +248,11 @@ export const LOW_ALLOY_STEELS: readonly Steel[] = [
     },
     densityKgM3: 7850,
     etchTone: 'grey',
-    etchWhy: 'medium carbon, Cr-Mo: mid grey',
+    etchWhy: 'medium carbon, Cr–Mo: mid grey',
     forging: { startMaxC: 1230, finishMinC: 830 },
     note: '',
     sources: {
-      composition: memory('SAE J404'),
+      composition: published('SAE J404 limits, read in two supplier tables'),
       density: HANDBOOK_DENSITY,
       forging: memory(
         'ASM Handbook forging tables; a forming-machine maker’s table gives 1150 to 850 °C for this class',
@@ -280,7 +280,7 @@ export const LOW_ALLOY_STEELS: readonly Steel[] = [
     forging: { startMaxC: 1230, finishMinC: 830 },
     note: '',
     sources: {
-      composition: memory('SAE J404'),
+      composition: published('SAE J404 limits, read in two supplier tables'),
       density: HANDBOOK_DENSITY,
       forging: memory(
         'ASM Handbook forging tables; a forming-machine maker’s table gives 1150 to 850 °C for this class',

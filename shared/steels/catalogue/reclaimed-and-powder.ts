@@ -116,7 +116,7 @@ export const RECLAIMED_AND_POWDER: readonly Steel[] = [
     etchTone: 'dark',
     etchWhy: 'as solid steel of the same analysis',
     forging: { startMaxC: 1180, finishMinC: 800 },
-    note: 'apparent (tap) density about 55-65 % of solid: 4300-5100 kg/m³; the can shrinks accordingly',
+    note: 'apparent (tap) density about 55–65 % of solid: 4300–5100 kg/m³; the can shrinks accordingly',
     sources: {
       composition: practice('trade knowledge'),
       density: HANDBOOK_DENSITY,

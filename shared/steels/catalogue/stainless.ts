@@ -21,7 +21,7 @@ export const STAINLESS_STEELS: readonly Steel[] = [
     etchTone: 'very-bright',
     etchWhy: 'not etched by dilute ferric chloride in these times',
     forging: { startMaxC: 1230, finishMinC: 925 },
-    note: 'cladding only; CTE about 1.3 x ferritic steel',
+    note: 'cladding only; CTE about 1.3 × ferritic steel',
     sources: {
       composition: published('composition in three public supplier tables (AISI and EN columns)'),
       density: HANDBOOK_DENSITY,
@@ -104,7 +104,7 @@ export const STAINLESS_STEELS: readonly Steel[] = [
     forging: { startMaxC: 1175, finishMinC: 900 },
     note: '',
     sources: {
-      composition: published('X30Cr13 C 0.26-0.35, Cr 12-14 in a public supplier table; AISI C ≥ 0.15'),
+      composition: published('X30Cr13 C 0.26–0.35, Cr 12–14 in a public supplier table; AISI C ≥ 0.15'),
       density: HANDBOOK_DENSITY,
       forging: memory(
         'ASM Handbook forging tables; a public encyclopaedia table gives 1095 °C as the start for magnetic stainless',

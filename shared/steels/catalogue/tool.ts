@@ -119,7 +119,7 @@ export const TOOL_STEELS: readonly Steel[] = [
     note: '',
     sources: {
       composition: partly(
-        'ASTM A681 composition from memory; forging 1850-1950 F, stop at 1500 F read in a public smithing guide',
+        'ASTM A681 composition from memory; forging 1850–1950 °F, stop at 1500 °F read in a public smithing guide',
       ),
       density: HANDBOOK_DENSITY,
       forging: published(
@@ -239,7 +239,7 @@ export const TOOL_STEELS: readonly Steel[] = [
     note: '',
     sources: {
       composition: partly(
-        'ASTM A681 from memory; forging 2000-2050 F, stop at 1700 F read in a public smithing guide',
+        'ASTM A681 from memory; forging 2000–2050 °F, stop at 1700 °F read in a public smithing guide',
       ),
       density: HANDBOOK_DENSITY,
       forging: memory(
@@ -266,7 +266,7 @@ export const TOOL_STEELS: readonly Steel[] = [
     etchTone: 'bright',
     etchWhy: '12 % Cr: light grey to bright',
     forging: { startMaxC: 1095, finishMinC: 925 },
-    note: 'incipient melting far below plain-carbon rule (eutectic carbides); do not use the Fe-C solidus line',
+    note: 'incipient melting far below plain-carbon rule (eutectic carbides); do not use the Fe–C solidus line',
     sources: { composition: memory('ASTM A681'), density: HANDBOOK_DENSITY, forging: TOOL_FORGING },
   },
   {
