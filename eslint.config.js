@@ -73,7 +73,11 @@ export default defineConfig(
       'prefer-const': 'error',
     },
   },
-  { files: ['**/*.{js,mjs,cjs}'], extends: [tseslint.configs.base], rules: { 'max-lines': ['error', 400] } },
+  {
+    files: ['**/*.{js,mjs,cjs}'],
+    extends: [tseslint.configs.base],
+    rules: { 'max-lines': ['error', 400], '@typescript-eslint/no-unused-vars': 'error' },
+  },
 
   {
     files: ['**/*.ts'],
