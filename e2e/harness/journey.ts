@@ -59,7 +59,11 @@ export function journey(name: string, env: NodeJS.ProcessEnv, body: (given: Give
 
 let currentSpec = '';
 
-jasmine.getEnv().addReporter({ specStarted: ({ fullName }) => (currentSpec = fullName) });
+jasmine.getEnv().addReporter({
+  specStarted: ({ fullName }) => {
+    currentSpec = fullName;
+  },
+});
 
 function fileName(text: string): string {
   return text.toLowerCase().replace(/[^a-z0-9]+/g, '-');
