@@ -103,7 +103,8 @@ export function cutBar(bar: BarState, removal: Removal): Cut | CutShort {
   const thicknessMm = bar.thicknessMm - removal.bottom - removal.top;
   if (!(lengthMm > MIN_EXTENT_MM)) return cutShort('length', removal.near + removal.far, bar.lengthMm);
   if (!(widthMm > MIN_EXTENT_MM)) return cutShort('width', removal.left + removal.right, bar.widthMm);
-  if (!(thicknessMm > MIN_EXTENT_MM)) return cutShort('thickness', removal.bottom + removal.top, bar.thicknessMm);
+  if (!(thicknessMm > MIN_EXTENT_MM))
+    return cutShort('thickness', removal.bottom + removal.top, bar.thicknessMm);
   let section = bar.section;
   let eatenLayers = 0;
   if (section !== null && bar.lie !== 'mixed') {

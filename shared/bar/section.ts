@@ -48,7 +48,9 @@ export function layerThicknessMm(section: Section, index: number): number {
 export function sectionOf(steels: Uint16Array, thicknessMm: Float64Array): Section {
   const count = steels.length;
   if (count === 0 || count !== thicknessMm.length) {
-    throw new RangeError(`sectionOf: ${count} steels and ${thicknessMm.length} thicknesses; both must be equal and > 0`);
+    throw new RangeError(
+      `sectionOf: ${count} steels and ${thicknessMm.length} thicknesses; both must be equal and > 0`,
+    );
   }
   return measured(steels, thicknessMm, 1, thicknessMm[0] as number, thicknessMm[count - 1] as number);
 }

@@ -30,14 +30,16 @@ export const LIMIT_DEFAULTS: {
     min: 10,
     max: 10_000,
     label: 'Length the forge heats, mm',
-    source: 'Common practice, no source: a two-burner forge open at both ends heats a bar of about 500 mm by sections',
+    source:
+      'Common practice, no source: a two-burner forge open at both ends heats a bar of about 500 mm by sections',
   },
   reductionPerHeat: {
     value: 0.4,
     min: 0.01,
     max: 0.95,
     label: 'Largest reduction of thickness in one heat, 0–1',
-    source: 'Common practice, no source: a press takes a third to two fifths of the thickness before the heat is gone',
+    source:
+      'Common practice, no source: a press takes a third to two fifths of the thickness before the heat is gone',
   },
 };
 

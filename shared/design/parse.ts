@@ -54,7 +54,8 @@ export function designProblems(design: Design): readonly DesignProblem[] {
   };
   const ownSteels = new Set<string>();
   design.steels?.forEach((steel, i) => {
-    if (ownSteels.has(steel.id)) report(['steels', i, 'id'], 'id-twice', `Two steels have the id "${steel.id}".`);
+    if (ownSteels.has(steel.id))
+      report(['steels', i, 'id'], 'id-twice', `Two steels have the id "${steel.id}".`);
     ownSteels.add(steel.id);
   });
   const before = new Set<string>();
@@ -85,7 +86,11 @@ export function designProblems(design: Design): readonly DesignProblem[] {
     before.add(bar.id);
   });
   if (!before.has(design.result)) {
-    report(['result'], 'bar-unknown', `The result is bar "${design.result}", which the design does not have.`);
+    report(
+      ['result'],
+      'bar-unknown',
+      `The result is bar "${design.result}", which the design does not have.`,
+    );
   }
   return problems;
 }

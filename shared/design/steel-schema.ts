@@ -12,13 +12,20 @@ export const steelSchema: z.ZodType<Steel> = z.strictObject({
   designations: z.record(text(40), text(120)),
   composition: z.record(
     text(16),
-    z.strictObject({ minPercent: percent.nullable(), maxPercent: percent.nullable(), nominalPercent: percent }),
+    z.strictObject({
+      minPercent: percent.nullable(),
+      maxPercent: percent.nullable(),
+      nominalPercent: percent,
+    }),
   ),
   densityKgM3: z.number().min(1_000).max(25_000),
   kind: text(60),
   etchTone: text(40),
   etchWhy: text(500),
-  forging: z.strictObject({ startMaxC: z.number().min(0).max(1_700), finishMinC: z.number().min(0).max(1_700) }),
+  forging: z.strictObject({
+    startMaxC: z.number().min(0).max(1_700),
+    finishMinC: z.number().min(0).max(1_700),
+  }),
   note: text(1_000),
   sources: z.strictObject({
     composition: z.strictObject({ text: text(1_000), status }),

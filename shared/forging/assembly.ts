@@ -1,6 +1,7 @@
 import {
   type BarState,
   MAX_SECTION_LAYERS,
+  MIN_EXTENT_MM,
   NO_LOSSES,
   NO_REMOVAL,
   type Lie,
@@ -39,11 +40,15 @@ export interface Assembled {
  * One of `count` equal lengths of a bar, sawn with `kerfMm` between them.
  * @returns the piece before it is turned, or a refusal when the kerfs use up the bar
  */
-export function pieceOfBar(bar: BarState, count: number, kerfMm: number): BarState | { readonly refusal: Refusal } {
+export function pieceOfBar(
+  bar: BarState,
+  count: number,
+  kerfMm: number,
+): BarState | { readonly refusal: Refusal } {
   if (count === 1) return bar;
   const kerfsMm = (count - 1) * kerfMm;
   const lengthMm = (bar.lengthMm - kerfsMm) / count;
-  if (!(lengthMm > 0)) return refuse('too-short', 'pieces', kerfsMm, bar.lengthMm);
+  if (!(lengthMm > MIN_EXTENT_MM)) return refuse('too-short', 'pieces', kerfsMm, bar.lengthMm);
   if (bar.lie !== 'length' || bar.section === null) return { ...bar, lengthMm };
   const section = isSolid(bar) ? scaleSection(bar.section, lengthMm / bar.lengthMm) : null;
   return { ...bar, lengthMm, section };
@@ -60,7 +65,10 @@ export function placed(bar: BarState, piece: Piece): BarState {
  * Puts placed pieces together. Along the thickness T is the sum, W the smallest, L the shortest; along the width the
  * same with W. What sticks out is trimmed at the far end and, across, equally on both sides.
  */
-export function assemble(pieces: readonly BarState[], along: Assembly['along']): Assembled | { readonly refusal: Refusal } {
+export function assemble(
+  pieces: readonly BarState[],
+  along: Assembly['along'],
+): Assembled | { readonly refusal: Refusal } {
   const across = along === 'thickness' ? 'widthMm' : 'thicknessMm';
   const lengthMm = Math.min(...pieces.map((piece) => piece.lengthMm));
   const acrossMm = Math.min(...pieces.map((piece) => piece[across]));
@@ -84,7 +92,10 @@ export function assemble(pieces: readonly BarState[], along: Assembly['along']):
   }
   const lain = layersTogether(trimmed, along);
   if ('refusal' in lain) return lain;
-  const togetherMm = trimmed.reduce((sum, piece) => sum + (along === 'thickness' ? piece.thicknessMm : piece.widthMm), 0);
+  const togetherMm = trimmed.reduce(
+    (sum, piece) => sum + (along === 'thickness' ? piece.thicknessMm : piece.widthMm),
+    0,
+  );
   const volume = trimmed.reduce((sum, piece) => sum + volumeMm3(piece), 0);
   const weighted = trimmed.reduce((sum, piece) => sum + volumeMm3(piece) * piece.densityKgM3, 0);
   return {
@@ -109,11 +120,13 @@ function layersTogether(
   const across = pieces.map((piece) => sectionAcross(piece, along));
   if (across.every((section) => section !== null)) {
     const count = across.reduce((sum, section) => sum + layerCount(section), 0);
-    if (count > MAX_SECTION_LAYERS) return refuse('too-many-layers', 'pieces', count, MAX_SECTION_LAYERS, 'layers');
+    if (count > MAX_SECTION_LAYERS)
+      return refuse('too-many-layers', 'pieces', count, MAX_SECTION_LAYERS, 'layers');
     return { lie: along, section: joinSections(across) };
   }
   const [first] = pieces as [BarState, ...BarState[]];
-  if (first.lie === 'mixed' || pieces.some((piece) => piece.lie !== first.lie)) return { lie: 'mixed', section: null };
+  if (first.lie === 'mixed' || pieces.some((piece) => piece.lie !== first.lie))
+    return { lie: 'mixed', section: null };
   const isOnePicture = pieces.every((piece) => piece.section === first.section);
   return { lie: first.lie, section: isOnePicture ? first.section : null };
 }

@@ -1,7 +1,15 @@
 import { type BarState, NO_LOSSES, addLosses, mapLosses, massKg } from '../bar/index.js';
 import { type Bar, DEFAULT_LIMITS, type Design, steelIdsOf, steelOf } from '../design/index.js';
 import type { Steel } from '../steels/index.js';
-import { type Allowances, DEFAULT_ALLOWANCES, type Refusal, type Step, isRefused, kindOf, scaled } from '../steps/index.js';
+import {
+  type Allowances,
+  DEFAULT_ALLOWANCES,
+  type Refusal,
+  type Step,
+  isRefused,
+  kindOf,
+  scaled,
+} from '../steps/index.js';
 import { cutPlanOf } from './cut-plan.js';
 import type { ForgedBar, ForgedState, Forging } from './forging.js';
 import { type Ground, startOf } from './start.js';
@@ -29,7 +37,12 @@ export function evaluate(design: Design, previous?: Forging): Forging {
     const start = startOf(bar, ground, before);
     const states: ForgedState[] = start.state ? [start.state] : [];
     const worked = start.state
-      ? workSteps(states, bar, allowances, start.state === before?.forged.states[0] ? before.forged : undefined)
+      ? workSteps(
+          states,
+          bar,
+          allowances,
+          start.state === before?.forged.states[0] ? before.forged : undefined,
+        )
       : { refusal: start.refusal && { ...start.refusal, step: null }, stepsForged: 0 };
     stepsForged += worked.stepsForged;
     forged.set(bar.id, {
@@ -135,5 +148,7 @@ function requireSteel(design: Design, id: string): Steel {
 }
 
 function definedOf<T extends object>(values: Partial<T> | undefined): Partial<T> {
-  return Object.fromEntries(Object.entries(values ?? {}).filter(([, value]) => value !== undefined)) as Partial<T>;
+  return Object.fromEntries(
+    Object.entries(values ?? {}).filter(([, value]) => value !== undefined),
+  ) as Partial<T>;
 }

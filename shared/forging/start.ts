@@ -23,7 +23,11 @@ export interface Start {
 }
 
 /** The start of a bar; the one computed before, when bar and pieces are the very same. */
-export function startOf(bar: Bar, ground: Ground, before: { bar: Bar; forged: ForgedBar } | undefined): Start {
+export function startOf(
+  bar: Bar,
+  ground: Ground,
+  before: { bar: Bar; forged: ForgedBar } | undefined,
+): Start {
   const kept = before?.bar.start === bar.start ? before.forged : undefined;
   const keptState = kept?.states[0];
   if (bar.start.kind === 'stack') {
@@ -36,9 +40,15 @@ export function startOf(bar: Bar, ground: Ground, before: { bar: Bar; forged: Fo
     return { state: keptState, refusal: null, overhangs: kept.overhangs, pieces: kept.pieces };
   }
   const assembled = assemble(laid.pieces, bar.start.along);
-  if ('refusal' in assembled) return { state: null, refusal: assembled.refusal, overhangs: [], pieces: laid.pieces };
+  if ('refusal' in assembled)
+    return { state: null, refusal: assembled.refusal, overhangs: [], pieces: laid.pieces };
   const lossesKg = addLosses(assembled.lossesKg, { ...NO_LOSSES, kerf: laid.kerfKg });
-  return { state: startState(assembled.bar, lossesKg), refusal: null, overhangs: assembled.overhangs, pieces: laid.pieces };
+  return {
+    state: startState(assembled.bar, lossesKg),
+    refusal: null,
+    overhangs: assembled.overhangs,
+    pieces: laid.pieces,
+  };
 }
 
 /** Mass of one saw cut through a finished bar, kg. */
@@ -59,7 +69,10 @@ function startState(bar: BarState, lossesKg: ForgedState['lossesKg']): ForgedSta
 function stackBar(stack: Stack, steels: readonly Steel[]): BarState {
   const steelIndex = new Map(steels.map((steel, index) => [steel.id, index]));
   const indexes = Uint16Array.from(stack.layers, (layer) => steelIndex.get(layer.steel) as number);
-  const section = sectionOf(indexes, Float64Array.from(stack.layers, (layer) => layer.thicknessMm));
+  const section = sectionOf(
+    indexes,
+    Float64Array.from(stack.layers, (layer) => layer.thicknessMm),
+  );
   const parts = stack.layers.map((layer, i) => ({
     densityKgM3: (steels[indexes[i] as number] as Steel).densityKgM3,
     share: layer.thicknessMm / section.totalMm,
@@ -91,7 +104,11 @@ function laidPieces(bar: Bar, ground: Ground): LaidPieces {
   for (const [i, piece] of bar.start.pieces.entries()) {
     const end = endOf(ground.forged.get(piece.bar));
     if (end === null) {
-      return { pieces, kerfKg, refusal: { code: 'piece-refused', field: 'pieces', asked: i + 1, available: i, unit: 'pieces' } };
+      return {
+        pieces,
+        kerfKg,
+        refusal: { code: 'piece-refused', field: 'pieces', asked: i + 1, available: i, unit: 'pieces' },
+      };
     }
     const length = pieceOfBar(end, ground.cutPlan.pieces.get(piece.bar) ?? 1, ground.allowances.kerfMm);
     if ('refusal' in length) return { pieces, kerfKg, refusal: length.refusal };
@@ -117,10 +134,12 @@ function isSame(a: readonly BarState[], b: readonly BarState[]): boolean {
 function isSameSection(a: BarState, b: BarState): boolean {
   if (a.section === b.section) return true;
   if (a.section === null || b.section === null) return false;
-  return a.section.steels.length === b.section.steels.length
-    && a.section.steels.every((steel, i) => steel === b.section?.steels[i])
-    && a.section.scale === b.section.scale
-    && a.section.firstMm === b.section.firstMm
-    && a.section.lastMm === b.section.lastMm
-    && a.section.baseMm.every((base, i) => base === b.section?.baseMm[i]);
+  return (
+    a.section.steels.length === b.section.steels.length &&
+    a.section.steels.every((steel, i) => steel === b.section?.steels[i]) &&
+    a.section.scale === b.section.scale &&
+    a.section.firstMm === b.section.firstMm &&
+    a.section.lastMm === b.section.lastMm &&
+    a.section.baseMm.every((base, i) => base === b.section?.baseMm[i])
+  );
 }

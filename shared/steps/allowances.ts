@@ -30,7 +30,8 @@ export const ALLOWANCE_DEFAULTS: { readonly [name in keyof Allowances]: Allowanc
     max: 10,
     unit: 'mm',
     label: 'Saw kerf',
-    source: 'Common practice, no source: shop band saw 1.3–1.6 mm, thin cutting disc 1.0–1.6 mm, chop saw 2.5–3.2 mm',
+    source:
+      'Common practice, no source: shop band saw 1.3–1.6 mm, thin cutting disc 1.0–1.6 mm, chop saw 2.5–3.2 mm',
   },
   seamGrindMm: {
     value: 0.5,
@@ -46,7 +47,8 @@ export const ALLOWANCE_DEFAULTS: { readonly [name in keyof Allowances]: Allowanc
     max: 1300,
     unit: '°C',
     label: 'Forging heat',
-    source: 'Common practice, no source: orange to yellow; keep below the forging maximum of every steel in the bar',
+    source:
+      'Common practice, no source: orange to yellow; keep below the forging maximum of every steel in the bar',
   },
   weldTemperatureC: {
     value: 1200,
@@ -54,7 +56,8 @@ export const ALLOWANCE_DEFAULTS: { readonly [name in keyof Allowances]: Allowanc
     max: 1350,
     unit: '°C',
     label: 'Welding heat',
-    source: 'Common practice, no source: usual flux weld 1150–1260 °C; 1200 °C suits most carbon and nickel steels',
+    source:
+      'Common practice, no source: usual flux weld 1150–1260 °C; 1200 °C suits most carbon and nickel steels',
   },
   minutesPerHeat: {
     value: 5,

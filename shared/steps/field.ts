@@ -41,7 +41,9 @@ export type Fields = Readonly<Record<string, Field>>;
 
 type ValueOf<F> =
   F extends ChoiceField<infer V> ? V : F extends FlagField ? boolean : F extends Field ? number : never;
-type OptionalNames<F extends Fields> = { [N in keyof F]: F[N] extends { isOptional: true } ? N : never }[keyof F];
+type OptionalNames<F extends Fields> = {
+  [N in keyof F]: F[N] extends { isOptional: true } ? N : never;
+}[keyof F];
 
 /** The data that a set of fields describes. */
 export type FieldData<F extends Fields> = {
@@ -87,7 +89,9 @@ function valueSchema(field: Field): z.ZodType {
     case 'length':
       return z.number().min(field.min).max(field.max);
     case 'number':
-      return field.isWhole ? z.number().int().min(field.min).max(field.max) : z.number().min(field.min).max(field.max);
+      return field.isWhole
+        ? z.number().int().min(field.min).max(field.max)
+        : z.number().min(field.min).max(field.max);
     case 'choice':
       return z.enum(field.options.map((option) => option.value));
     case 'flag':

@@ -32,19 +32,7 @@ export const STEP_KINDS = {
 } as const;
 
 export type Step =
-  | Weld
-  | Draw
-  | Restack
-  | Fold
-  | Turn
-  | Twist
-  | Groove
-  | Dimple
-  | Wedge
-  | Corner
-  | Slice
-  | Grind
-  | Trim;
+  Weld | Draw | Restack | Fold | Turn | Twist | Groove | Dimple | Wedge | Corner | Slice | Grind | Trim;
 
 export type StepKindName = keyof typeof STEP_KINDS;
 export const STEP_KIND_NAMES = Object.keys(STEP_KINDS) as readonly StepKindName[];

@@ -26,7 +26,11 @@ export function withStack(design: Design, barId: string, change: (stack: Stack) 
 }
 
 /** The design with a bar's assembly changed. @throws RangeError when the bar starts as a stack */
-export function withAssembly(design: Design, barId: string, change: (assembly: Assembly) => Assembly): Design {
+export function withAssembly(
+  design: Design,
+  barId: string,
+  change: (assembly: Assembly) => Assembly,
+): Design {
   return withBar(design, barId, (bar) => {
     if (bar.start.kind !== 'assembly') throw new RangeError(`withAssembly: bar "${barId}" starts as a stack`);
     const start = change(bar.start);
@@ -67,7 +71,12 @@ export function renameBar(design: Design, barId: string, name: string): Design {
 export function duplicateBar(design: Design, barId: string, newId: () => string): Design {
   const at = design.bars.findIndex((bar) => bar.id === barId);
   const bar = barOf(design, barId);
-  const copy = { ...bar, id: newId(), name: `${bar.name} (copy)`, steps: bar.steps.map((step) => ({ ...step, id: newId() })) };
+  const copy = {
+    ...bar,
+    id: newId(),
+    name: `${bar.name} (copy)`,
+    steps: bar.steps.map((step) => ({ ...step, id: newId() })),
+  };
   return { ...design, bars: [...design.bars.slice(0, at + 1), copy, ...design.bars.slice(at + 1)] };
 }
 

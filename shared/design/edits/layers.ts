@@ -122,7 +122,11 @@ export function setThicknessRatio(
 }
 
 /** Length and width of a stack, mm. */
-export function setStackSize(design: Design, barId: string, size: { lengthMm?: number; widthMm?: number }): Design {
+export function setStackSize(
+  design: Design,
+  barId: string,
+  size: { lengthMm?: number; widthMm?: number },
+): Design {
   return withStack(design, barId, (stack) => ({ ...stack, ...size }));
 }
 

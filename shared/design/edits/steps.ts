@@ -44,7 +44,9 @@ export function duplicateStep(design: Design, barId: string, stepId: string, new
 /** Switches a step off, or on again. */
 export function toggleStep(design: Design, barId: string, stepId: string): Design {
   return changeSteps(design, barId, (steps) =>
-    steps.map((step) => (step.id === stepId ? withFields(step, { isOff: step.isOff ? undefined : true }) : step)),
+    steps.map((step) =>
+      step.id === stepId ? withFields(step, { isOff: step.isOff ? undefined : true }) : step,
+    ),
   );
 }
 
@@ -62,7 +64,10 @@ export function copySteps(
   return copies.length === 0 ? design : changeSteps(design, toBarId, (steps) => [...steps, ...copies]);
 }
 
-function withFields(step: Step, fields: Readonly<Record<string, string | number | boolean | undefined>>): Step {
+function withFields(
+  step: Step,
+  fields: Readonly<Record<string, string | number | boolean | undefined>>,
+): Step {
   const next: Record<string, unknown> = { ...step };
   for (const [name, value] of Object.entries(fields)) {
     if (value === undefined) delete next[name];
@@ -74,7 +79,11 @@ function withFields(step: Step, fields: Readonly<Record<string, string | number 
   return isSame ? step : (next as unknown as Step);
 }
 
-function changeSteps(design: Design, barId: string, change: (steps: readonly Step[]) => readonly Step[]): Design {
+function changeSteps(
+  design: Design,
+  barId: string,
+  change: (steps: readonly Step[]) => readonly Step[],
+): Design {
   return withBar(design, barId, (bar) => {
     const steps = change(bar.steps);
     const isSame = steps.length === bar.steps.length && steps.every((step, i) => step === bar.steps[i]);

@@ -13,7 +13,8 @@ export const corner: StepKind<Corner> = {
   forge: (bar) => forgedTo(turnedInSection(bar)),
   words: {
     name: 'Forge on the corners',
-    purpose: 'Forge a square bar on its corners until they are the new flats: the layers lie on the diagonal.',
+    purpose:
+      'Forge a square bar on its corners until they are the new flats: the layers lie on the diagonal.',
     instruction: () => 'Forge on the corners until they are the new flats',
   },
 };

@@ -7,7 +7,12 @@ const STRAY = 0.35;
  * Middle of the dimple in column `i` and row `j` of the lattice, mm: x from the near end, y from mid-width.
  * Columns lie at (i + ½)·pitch, shifted patterns half a pitch along, odd rows of a staggered layout too.
  */
-export function dimpleMiddle(step: Dimple, isShifted: boolean, i: number, j: number): { x: number; y: number } {
+export function dimpleMiddle(
+  step: Dimple,
+  isShifted: boolean,
+  i: number,
+  j: number,
+): { x: number; y: number } {
   const isOddRow = Math.abs(j % 2) === 1;
   const along = i + 0.5 + (isShifted ? 0.5 : 0) + (step.layout === 'staggered' && isOddRow ? 0.5 : 0);
   if (step.layout !== 'scattered') return { x: along * step.pitchMm, y: j * step.rowPitchMm };

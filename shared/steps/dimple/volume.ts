@@ -37,7 +37,8 @@ function oneVolume(bar: BarState, step: Dimple, isShifted: boolean, i: number, j
   const rim = rimRadiusMm(step.radiusMm, step.depthMm);
   const middle = dimpleMiddle(step, isShifted, i, j);
   const y = middle.y + bar.widthMm / 2;
-  if (middle.x + rim <= 0 || middle.x - rim >= bar.lengthMm || y + rim <= 0 || y - rim >= bar.widthMm) return 0;
+  if (middle.x + rim <= 0 || middle.x - rim >= bar.lengthMm || y + rim <= 0 || y - rim >= bar.widthMm)
+    return 0;
   const isWhole = middle.x >= rim && middle.x + rim <= bar.lengthMm && y >= rim && y + rim <= bar.widthMm;
   const neighbours = neighboursOf(step, isShifted, i, j, rim);
   if (isWhole && neighbours.length === 0) return freeDimpleVolumeMm3(step.radiusMm, step.depthMm);
@@ -82,7 +83,13 @@ function isNearest(dx: number, dy: number, middle: Middle, neighbours: readonly 
   return neighbours.every((other) => (middle.x + dx - other.x) ** 2 + (middle.y + dy - other.y) ** 2 >= own);
 }
 
-function neighboursOf(step: Dimple, isShifted: boolean, i: number, j: number, rim: number): readonly Middle[] {
+function neighboursOf(
+  step: Dimple,
+  isShifted: boolean,
+  i: number,
+  j: number,
+  rim: number,
+): readonly Middle[] {
   const middle = dimpleMiddle(step, isShifted, i, j);
   const reachI = Math.min(12, Math.ceil((2 * rim) / step.pitchMm) + 1);
   const reachJ = Math.min(12, Math.ceil((2 * rim) / step.rowPitchMm) + 1);

@@ -16,7 +16,8 @@ export const draw: StepKind<Draw> = {
   forge: (bar, step) => drawTo(bar, step),
   words: {
     name: 'Draw out',
-    purpose: 'Make the bar longer or wider and thinner; the volume stays. Give one or two sizes, the rest follows.',
+    purpose:
+      'Make the bar longer or wider and thinner; the volume stays. Give one or two sizes, the rest follows.',
     instruction: (step, format) => {
       const sides = sizeWords(step, format);
       return sides ? `Draw to ${sides}` : 'Heat without changing the size';

@@ -1,6 +1,7 @@
 import {
   type BarState,
   MAX_SECTION_LAYERS,
+  MIN_EXTENT_MM,
   NO_LOSSES,
   NO_REMOVAL,
   cutBar,
@@ -16,6 +17,8 @@ import type { Fold } from './fields.js';
 /** Folds a bar at mid-length, top faces meeting: L = L/2, T = 2·(T - g). Like faces always meet: b bands give 2b - 1. */
 export function foldBar(start: BarState, step: Fold, allowances: Allowances): ForgeResult {
   const bar = solidAcross(start, 'thickness');
+  if (!(bar.lengthMm / 2 > MIN_EXTENT_MM))
+    return refuse('too-short', 'kind', 2 * MIN_EXTENT_MM, bar.lengthMm);
   const grindMm = step.grindPerFaceMm ?? allowances.seamGrindMm;
   const half = cutBar({ ...bar, lengthMm: bar.lengthMm / 2 }, { ...NO_REMOVAL, top: grindMm });
   if (isCutShort(half)) return refuseCut(half, 'grindPerFaceMm');

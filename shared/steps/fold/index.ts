@@ -14,7 +14,8 @@ export const fold: StepKind<Fold> = {
   forge: foldBar,
   words: {
     name: 'Fold',
-    purpose: 'Cut half through at mid-length and hinge the far half over onto the near one; the top faces meet.',
+    purpose:
+      'Cut half through at mid-length and hinge the far half over onto the near one; the top faces meet.',
     instruction: (step, format) =>
       step.grindPerFaceMm === undefined
         ? 'Clean the top face, hot cut at mid-length and fold it onto itself'

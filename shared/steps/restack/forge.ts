@@ -1,6 +1,7 @@
 import {
   type BarState,
   MAX_SECTION_LAYERS,
+  MIN_EXTENT_MM,
   NO_LOSSES,
   NO_REMOVAL,
   type Section,
@@ -23,7 +24,7 @@ export function restackBar(start: BarState, step: Restack, allowances: Allowance
   const { pieces } = step;
   const kerfsMm = (pieces - 1) * allowances.kerfMm;
   const pieceMm = (bar.lengthMm - kerfsMm) / pieces;
-  if (!(pieceMm > 0)) return refuse('too-short', 'pieces', kerfsMm, bar.lengthMm);
+  if (!(pieceMm > MIN_EXTENT_MM)) return refuse('too-short', 'pieces', kerfsMm, bar.lengthMm);
   const grindMm = step.grindPerFaceMm ?? allowances.seamGrindMm;
   const piece = cutBar({ ...bar, lengthMm: pieceMm }, { ...NO_REMOVAL, bottom: grindMm, top: grindMm });
   if (isCutShort(piece)) return refuseCut(piece, 'grindPerFaceMm');
@@ -50,10 +51,16 @@ export function restackBar(start: BarState, step: Restack, allowances: Allowance
   };
 }
 
-function stackedSection(piece: BarState, pieces: number, turnAlternate: boolean): Section | null | 'too-many' {
+function stackedSection(
+  piece: BarState,
+  pieces: number,
+  turnAlternate: boolean,
+): Section | null | 'too-many' {
   if (piece.section === null || piece.lie === 'mixed' || piece.lie === 'length') return null;
   if (piece.lie === 'width') return piece.section;
   if (layerCount(piece.section) * pieces > MAX_SECTION_LAYERS) return 'too-many';
   const turned = turnAlternate ? mirrorSection(piece.section) : piece.section;
-  return joinSections(Array.from({ length: pieces }, (_, k) => (k % 2 === 1 ? turned : piece.section) as Section));
+  return joinSections(
+    Array.from({ length: pieces }, (_, k) => (k % 2 === 1 ? turned : piece.section) as Section),
+  );
 }

@@ -18,7 +18,9 @@ export const restack: StepKind<Restack> = {
     instruction: (step, format) =>
       [
         `Cut into ${format.count(step.pieces)} equal lengths`,
-        step.grindPerFaceMm === undefined ? 'clean the faces' : `grind ${format.length(step.grindPerFaceMm)} off each face`,
+        step.grindPerFaceMm === undefined
+          ? 'clean the faces'
+          : `grind ${format.length(step.grindPerFaceMm)} off each face`,
         step.turnAlternate ? 'stack, every second one turned over' : 'stack the same way up',
       ].join(', '),
   },

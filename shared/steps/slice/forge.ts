@@ -23,7 +23,8 @@ export function sliceBar(bar: BarState, step: Slice, allowances: Allowances): Fo
   const areaMm2 = bar.widthMm * bar.thicknessMm;
   if (bar.lie === 'thickness' && bar.section !== null && !isSolid(bar)) {
     const asked = step.count * layerCount(bar.section);
-    if (asked > MAX_SECTION_LAYERS) return refuse('too-many-layers', 'count', asked, MAX_SECTION_LAYERS, 'layers');
+    if (asked > MAX_SECTION_LAYERS)
+      return refuse('too-many-layers', 'count', asked, MAX_SECTION_LAYERS, 'layers');
   }
   return {
     bar: {
@@ -58,7 +59,8 @@ function layersAfter(bar: BarState, step: Slice): { lie: Lie; section: Section |
       // Each slice holds other layers, so no single walk shows them all; a solid bar is solid all the same.
       return {
         lie: 'thickness',
-        section: section !== null && isSolid(bar) ? scaleSection(section, step.sliceMm / section.totalMm) : null,
+        section:
+          section !== null && isSolid(bar) ? scaleSection(section, step.sliceMm / section.totalMm) : null,
       };
     default:
       return { lie, section };

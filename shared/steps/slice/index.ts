@@ -12,7 +12,12 @@ export const slice: StepKind<Slice> = {
   usualHeats: 0,
   propose: (bar) => {
     const sliceMm = Math.min(6, Math.max(0.5, bar.lengthMm / 10));
-    return { kind: 'slice', sliceMm, count: Math.max(1, Math.min(8, Math.floor(bar.lengthMm / (sliceMm + 2)))), turnAlternate: false };
+    return {
+      kind: 'slice',
+      sliceMm,
+      count: Math.max(1, Math.min(8, Math.floor(bar.lengthMm / (sliceMm + 2)))),
+      turnAlternate: false,
+    };
   },
   forge: sliceBar,
   words: {

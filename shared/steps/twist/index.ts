@@ -17,7 +17,9 @@ export const twist: StepKind<Twist> = {
     purpose: 'Twist a square or round bar about its length; ground into, it shows stars and waves.',
     instruction: (step, format) =>
       `Twist ${format.count(step.turns)} turns, ${step.hand} hand` +
-      (step.reversals > 0 ? `, direction changed ${format.count(step.reversals)} times at equal distances` : ''),
+      (step.reversals > 0
+        ? `, direction changed ${format.count(step.reversals)} times at equal distances`
+        : ''),
   },
 };
 
@@ -26,7 +28,9 @@ export const twist: StepKind<Twist> = {
  * Layers across the length are their own image.
  */
 export function turnedInSection(bar: BarState): BarState {
-  return bar.lie === 'length' || bar.lie === 'mixed' || isSolid(bar) ? bar : { ...bar, lie: 'mixed', section: null };
+  return bar.lie === 'length' || bar.lie === 'mixed' || isSolid(bar)
+    ? bar
+    : { ...bar, lie: 'mixed', section: null };
 }
 
 /** About one turn for each 1.25 diameters of length: surface shear near 2.5. Common practice, no source. */

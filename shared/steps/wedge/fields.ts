@@ -1,7 +1,13 @@
 import type { Fields, StepOf } from '../field.js';
 
 export const wedgeFields = {
-  dragMm: { type: 'length', label: 'Drag at the cut', hint: 'how far the layers are pulled down', min: 0, max: 500 },
+  dragMm: {
+    type: 'length',
+    label: 'Drag at the cut',
+    hint: 'how far the layers are pulled down',
+    min: 0,
+    max: 500,
+  },
   reachMm: {
     type: 'length',
     label: 'Reach',

@@ -23,7 +23,8 @@ export const wedge: StepKind<Wedge> = {
       : forgedTo({ ...bar, openSeams: bar.openSeams + 1 }),
   words: {
     name: 'Split with the wedge',
-    purpose: 'Split the bar lengthwise with a blunt wedge and weld it shut again: the layers are dragged into a feather.',
+    purpose:
+      'Split the bar lengthwise with a blunt wedge and weld it shut again: the layers are dragged into a feather.',
     instruction: (step, format) =>
       `Split down the middle of the width with a blunt wedge (drag ${format.length(step.dragMm)}, reach ${format.length(step.reachMm)}), weld shut`,
   },
