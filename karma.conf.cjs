@@ -1,7 +1,9 @@
 // CommonJS because Karma loads its configuration with require().
 const { existsSync } = require('node:fs');
 
-process.env.CHROME_BIN ??= ['/usr/bin/chromium', '/usr/bin/chromium-browser', '/usr/bin/google-chrome'].find(existsSync);
+process.env.CHROME_BIN ??= ['/usr/bin/chromium', '/usr/bin/chromium-browser', '/usr/bin/google-chrome'].find(
+  existsSync,
+);
 
 module.exports = (config) =>
   config.set({
