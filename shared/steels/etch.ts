@@ -32,12 +32,19 @@ export const ETCH_SOURCE: Source = {
 };
 
 /**
- * The class a material etches like, from its nominal composition; its stated tone decides where the composition leaves
- * it open (a `grey` 52100 or 9260 is no dark steel, a `bright` D2 is no A2).
+ * The class a material etches like, from its nominal composition. Its stated tone decides where the composition leaves
+ * it open (a `grey` 52100 or 9260 is no dark steel), where there is no composition, and where the two can't both be
+ * right: whoever looked at the etch knows better.
  */
 export function etchClassOf(steel: Etched): EtchClass {
   if (steel.etchTone === 'copper-red') return 'copper';
   if (steel.etchTone === 'n/a') return 'fitting';
+  const expected = classByComposition(steel);
+  return expected !== null && TONES_OF[expected].includes(steel.etchTone) ? expected : classByTone(steel);
+}
+
+function classByComposition(steel: Etched): EtchClass | null {
+  if (Object.keys(steel.composition).length === 0) return null;
   const carbon = nominalPercent(steel, 'C');
   const manganese = nominalPercent(steel, 'Mn');
   const nickel = nominalPercent(steel, 'Ni');
@@ -49,13 +56,47 @@ export function etchClassOf(steel: Etched): EtchClass {
   }
   if (nickel >= 3) return 'high-nickel';
   if (nickel >= 1.2) return 'nickel-steel';
-  if (carbon < 0.25 && chromium < 3 && nickel < 0.5) {
-    return nominalPercent(steel, 'P') >= 0.2 ? 'phosphoric-iron' : 'mild';
-  }
   if (nickel >= 0.5 || chromium >= 3) return 'half-bright';
+  if (carbon < 0.25) return nominalPercent(steel, 'P') >= 0.2 ? 'phosphoric-iron' : 'mild';
   if (carbon < 0.55 || steel.etchTone === 'grey') return 'medium-carbon';
   if (manganese >= 1.2) return 'manganese-tool';
   return manganese >= 0.8 ? 'manganese-carbon' : 'high-carbon';
+}
+
+/** Tones that a class may show. */
+const TONES_OF: Readonly<Record<EtchClass, readonly EtchTone[]>> = {
+  nickel: ['very-bright'],
+  'austenitic-stainless': ['very-bright'],
+  'chromium-stainless': ['very-bright', 'bright'],
+  'high-nickel': ['very-bright', 'bright'],
+  'nickel-steel': ['very-bright', 'bright'],
+  'chromium-tool': ['bright'],
+  'phosphoric-iron': ['bright', 'grey'],
+  mild: ['grey'],
+  'half-bright': ['bright', 'grey'],
+  'medium-carbon': ['grey', 'dark'],
+  'high-carbon': ['dark'],
+  'manganese-carbon': ['dark'],
+  'manganese-tool': ['dark'],
+  copper: ['copper-red'],
+  fitting: ['n/a'],
+};
+
+function classByTone(steel: Etched): EtchClass {
+  switch (steel.etchTone) {
+    case 'very-bright':
+      return 'high-nickel';
+    case 'bright':
+      return 'nickel-steel';
+    case 'grey':
+      return nominalPercent(steel, 'Cr') >= 3 ? 'half-bright' : 'medium-carbon';
+    case 'dark':
+      return 'high-carbon';
+    case 'copper-red':
+      return 'copper';
+    case 'n/a':
+      return 'fitting';
+  }
 }
 
 /**
@@ -144,6 +185,23 @@ const HATCH: Readonly<Record<EtchClass, Hatch>> = {
 /** The hatch of a material, by the class it etches like: usual partners are of different classes, so they differ. */
 export function hatchOf(steel: Etched): Hatch {
   return HATCH[etchClassOf(steel)];
+}
+
+/**
+ * A hatch for each of the materials shown together, in their order: its own where that is free, else the next free one,
+ * so that no two look alike. Past the number of hatches they repeat.
+ */
+export function distinctHatches(steels: readonly Etched[]): Hatch[] {
+  const taken = new Set<Hatch>();
+  return steels.map((steel) => {
+    const own = hatchOf(steel);
+    const start = HATCHES.indexOf(own);
+    const free = HATCHES.map((_, step) => HATCHES[(start + step) % HATCHES.length] as Hatch).find(
+      (h) => !taken.has(h),
+    );
+    taken.add(free ?? own);
+    return free ?? own;
+  });
 }
 
 /** How a material is drawn. */
