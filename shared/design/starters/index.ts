@@ -1,12 +1,18 @@
-import type { Design } from '../schema.js';
-import { straight } from './straight.js';
+import type { Starter } from './plan.js';
+import { fiveBars, fourWay, sanMai } from './several-bars.js';
+import { feather, laddered, onTheCorners, raindrop, straight, twisted } from './single-bar.js';
 
-/** A ready design to start from. */
-export interface Starter {
-  readonly id: string;
-  readonly title: string;
-  readonly sentence: string;
-  readonly design: Design;
-}
+export type { Starter } from './plan.js';
 
-export const STARTERS: readonly Starter[] = [straight];
+/** Ready designs for the common patterns, from the plain to the elaborate. All figures: common practice, no source. */
+export const STARTERS: readonly Starter[] = [
+  straight,
+  twisted,
+  laddered,
+  raindrop,
+  feather,
+  onTheCorners,
+  fourWay,
+  fiveBars,
+  sanMai,
+];
