@@ -23,26 +23,26 @@ import type { UnitSystem } from './unit-system.js';
 export interface Format {
   readonly system: UnitSystem;
   /** `2.4 mm`; `3/32 in`. */
-  length(mm: number, options?: LengthOptions): string;
-  lengthParts(mm: number, options?: LengthOptions): QuantityParts;
+  readonly length: (mm: number, options?: LengthOptions) => string;
+  readonly lengthParts: (mm: number, options?: LengthOptions) => QuantityParts;
   /** For rough work: whole millimetres, or the nearest sixteenth of an inch. */
-  roughLength(mm: number, options?: LengthOptions): string;
+  readonly roughLength: (mm: number, options?: LengthOptions) => string;
   /** `150 × 25 × 50 mm`. */
-  size(sidesMm: readonly number[], options?: LengthOptions): string;
-  mass(kg: number, options?: NumberOptions): string;
-  massParts(kg: number, options?: NumberOptions): QuantityParts;
-  temperature(temperatureC: number, options?: TemperatureOptions): string;
-  temperatureParts(temperatureC: number, options?: TemperatureOptions): QuantityParts;
-  temperatureDifference(deltaK: number, options?: TemperatureOptions): string;
+  readonly size: (sidesMm: readonly number[], options?: LengthOptions) => string;
+  readonly mass: (kg: number, options?: NumberOptions) => string;
+  readonly massParts: (kg: number, options?: NumberOptions) => QuantityParts;
+  readonly temperature: (temperatureC: number, options?: TemperatureOptions) => string;
+  readonly temperatureParts: (temperatureC: number, options?: TemperatureOptions) => QuantityParts;
+  readonly temperatureDifference: (deltaK: number, options?: TemperatureOptions) => string;
   /** From mm³: `187.5 cm³`; `11.44 in³`. */
-  volume(volumeMm3: number, options?: NumberOptions): string;
+  readonly volume: (volumeMm3: number, options?: NumberOptions) => string;
   /** From a fraction 0–1: `12.5 %`. */
-  percent(fraction: number, options?: NumberOptions): string;
-  count(count: number): string;
+  readonly percent: (fraction: number, options?: NumberOptions) => string;
+  readonly count: (count: number) => string;
   /** A bare number, two decimals unless told otherwise. */
-  number(value: number, options?: NumberOptions): string;
+  readonly number: (value: number, options?: NumberOptions) => string;
   /** From minutes: `1 h 20 min`. */
-  duration(minutes: number, options?: NumberOptions): string;
+  readonly duration: (minutes: number, options?: NumberOptions) => string;
 }
 
 /**

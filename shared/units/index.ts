@@ -1,6 +1,7 @@
 export * from './format.js';
 export * from './length-format.js';
 export * from './length-parse.js';
+export * from './length-step.js';
 export {
   formatCount,
   formatNumber,
@@ -9,5 +10,6 @@ export {
   type QuantityParts,
 } from './number-text.js';
 export * from './quantity-format.js';
+export * from './quantity-parse.js';
 export { type Refusal } from './typed-text.js';
 export * from './unit-system.js';

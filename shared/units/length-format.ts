@@ -149,5 +149,5 @@ function lowered(value: number): string {
 }
 
 function digitsFrom(value: number, alphabet: string): string {
-  return [...String(value)].map((digit) => alphabet[Number(digit)] ?? digit).join('');
+  return String(value).replace(/\d/g, (digit) => alphabet[Number(digit)] ?? digit);
 }

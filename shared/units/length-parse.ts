@@ -1,5 +1,5 @@
 import type { UnitSystem } from './unit-system.js';
-import { plainText, readNumber, type Refusal } from './typed-text.js';
+import { LONGEST_ENTRY, plainText, quoted, readNumber, type Refusal } from './typed-text.js';
 
 /** A length that was understood, or why it wasn't, in words for whoever typed it. */
 export type ParsedLength = { readonly ok: true; readonly mm: number } | Refusal;
@@ -47,9 +47,10 @@ const MIXED = /^(?:(\d+)(?:\s*[-+]\s*|\s+(?:and\s+)?))?(\d+)\s*\/\s*(\d+)$/u;
  */
 export function parseLength(text: string, system: UnitSystem): ParsedLength {
   const typed = text.trim();
+  if (typed.length > LONGEST_ENTRY) return refuse(`${quoted(typed)} is too long for a length.`);
   const plain = plainText(text);
   if (plain === '') return refuse('Nothing is typed. Give a length, such as 3/32 or 2.4 mm.');
-  if (/^-/.test(plain)) return refuse(`“${typed}” is less than nothing. A length can't be negative.`);
+  if (/^-/.test(plain)) return refuse(`${quoted(typed)} is less than nothing. A length can't be negative.`);
 
   const both = FEET_AND_INCHES.exec(plain);
   if (both) {
@@ -70,7 +71,7 @@ export function parseLength(text: string, system: UnitSystem): ParsedLength {
   if (!quantity.ok) return quantity;
   const unit = one[2]?.replace(/\.$/, '') ?? (system === 'inch' || quantity.isFraction ? 'in' : 'mm');
   if (!Object.hasOwn(UNITS, unit)) {
-    return refuse(`“${unit}” in “${typed}” is no unit of length here. Use mm, cm, m, in or ft.`);
+    return refuse(`“${unit}” in ${quoted(typed)} is no unit of length here. Use mm, cm, m, in or ft.`);
   }
   return lengthOf(quantity, unit, typed);
 }
@@ -104,10 +105,10 @@ function readQuantity(text: string, typed: string): Quantity | Refusal {
   const numerator = Number(mixed[2]);
   const denominator = Number(mixed[3]);
   if (denominator === 0)
-    return refuse(`“${typed}” divides by nothing. Put a number above 0 under the stroke.`);
+    return refuse(`${quoted(typed)} divides by nothing. Put a number above 0 under the stroke.`);
   if (mixed[1] !== undefined && numerator >= denominator) {
     return refuse(
-      `“${typed}” has a whole number beside ${numerator}/${denominator}, which is 1 or more by itself.`,
+      `${quoted(typed)} has a whole number beside ${numerator}/${denominator}, which is 1 or more by itself.`,
     );
   }
   return { ok: true, numerator: whole * denominator + numerator, denominator, isFraction: true };
@@ -117,16 +118,17 @@ function readQuantity(text: string, typed: string): Quantity | Refusal {
 function lengthOf(quantity: Ratio, unit: string, typed: string): ParsedLength {
   const size = UNITS[unit] as Ratio;
   const mm = (quantity.numerator * size.numerator) / (quantity.denominator * size.denominator);
-  return mm <= LONGEST_MM ? { ok: true, mm } : refuse(`“${typed}” is too long. The most is 100 m.`);
+  return mm <= LONGEST_MM ? { ok: true, mm } : refuse(`${quoted(typed)} is too long. The most is 100 m.`);
 }
 
 function explain(plain: string, typed: string): string {
-  if (!/\d/.test(plain)) return `“${typed}” has no number in it. Give a length, such as 3/32 or 2.4 mm.`;
+  if (!/\d/.test(plain))
+    return `${quoted(typed)} has no number in it. Give a length, such as 3/32 or 2.4 mm.`;
   if (/\d\s*\/\s*(?!\s*\d)|(?<!\d\s*)\//u.test(plain))
-    return `“${typed}” has a stroke without a number on both sides. Write 3/32.`;
+    return `${quoted(typed)} has a stroke without a number on both sides. Write 3/32.`;
   if (/\d\s+[\d.,]/.test(plain))
-    return `“${typed}” has two numbers and no unit between them. Write 1 3/8 or 1.375.`;
-  return `“${typed}” can't be read as a length. Write it like 3/32, 1 3/8 in or 2.4 mm.`;
+    return `${quoted(typed)} has two numbers and no unit between them. Write 1 3/8 or 1.375.`;
+  return `${quoted(typed)} can't be read as a length. Write it like 3/32, 1 3/8 in or 2.4 mm.`;
 }
 
 function refuse(reason: string): Refusal {

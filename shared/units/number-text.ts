@@ -49,14 +49,22 @@ export function joinParts(parts: QuantityParts): string {
     : `${parts.number} ${parts.unit}`;
 }
 
+/** From this size on, so many decimals. */
+export type DecimalHabit = readonly (readonly [from: number, digits: number])[];
+
 /**
- * Decimals that leave at least two significant digits below the smallest habit, so that a thin band never reads 0.
- * @param limits pairs of (from this size on, this many decimals), largest size first
+ * Decimals by the size of what is shown. What the next finer habit would round up to a limit belongs above it: 9.996
+ * is 10, not 10.00.
+ * @param habit largest size first, the last one from 0
  */
-export function decimalsBySize(value: number, limits: readonly (readonly [number, number])[]): number {
+export function decimalsBySize(value: number, habit: DecimalHabit): number {
   const size = Math.abs(value);
-  for (const [from, digits] of limits) {
-    if (Number(size.toFixed(digits)) >= from) return digits;
+  let digits = 0;
+  for (let i = 0; i < habit.length; i++) {
+    const [from, here] = habit[i] as DecimalHabit[number];
+    digits = here;
+    const finer = habit[i + 1]?.[1] ?? here;
+    if (Number(size.toFixed(finer)) >= from) break;
   }
-  return limits[limits.length - 1]?.[1] ?? 0;
+  return digits;
 }

@@ -2,6 +2,7 @@ import {
   decimalsBySize,
   formatNumber,
   joinParts,
+  type DecimalHabit,
   type NumberOptions,
   type QuantityParts,
 } from './number-text.js';
@@ -140,9 +141,7 @@ const VOLUME_DIGITS = [
   [0, 3],
 ] as const;
 
-type Digits = readonly (readonly [number, number])[];
-
-function part(value: number, digits: Digits, unit: string, options: NumberOptions): QuantityParts {
+function part(value: number, digits: DecimalHabit, unit: string, options: NumberOptions): QuantityParts {
   return { number: formatNumber(value, decimalsBySize(value, digits), options), unit };
 }
 

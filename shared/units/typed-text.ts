@@ -4,6 +4,15 @@ export interface Refusal {
   readonly reason: string;
 }
 
+/** The most characters that an entry may have; nobody types a longer number. */
+export const LONGEST_ENTRY = 80;
+
+/** What was typed, in quotation marks and cut to what can be read at a glance. */
+export function quoted(text: string): string {
+  const typed = text.trim();
+  return `“${typed.length > 40 ? `${typed.slice(0, 39)}…` : typed}”`;
+}
+
 const VULGAR: Readonly<Record<string, string>> = {
   '¼': '1/4',
   '½': '1/2',
@@ -70,11 +79,11 @@ export function readNumber(text: string, typed: string): DecimalNumber | Refusal
     const [before, after] = text.split(',') as [string, string];
     return {
       ok: false,
-      reason: `“${typed}” could mean ${before}.${after} or ${before}${after}. Write the one you mean.`,
+      reason: `${quoted(typed)} could mean ${before}.${after} or ${before}${after}. Write the one you mean.`,
     };
   }
   const plain = withPoint(text);
-  if (!Number.isFinite(Number(plain))) return { ok: false, reason: `“${text}” is not a number.` };
+  if (!Number.isFinite(Number(plain))) return { ok: false, reason: `${quoted(text)} is not a number.` };
   const [whole = '', decimals = ''] = plain.split('.');
   const digits = whole + decimals.slice(0, Math.max(0, MOST_DIGITS - whole.length));
   return { ok: true, numerator: Number(digits), denominator: 10 ** (digits.length - whole.length) };
