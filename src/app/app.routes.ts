@@ -1,0 +1,26 @@
+import type { Routes } from '@angular/router';
+
+export const routes: Routes = [
+  {
+    path: '',
+    pathMatch: 'full',
+    title: 'Bench',
+    loadComponent: () => import('./bench/bench-page').then((m) => m.BenchPage),
+  },
+  {
+    path: 'draft',
+    title: 'Draft',
+    loadChildren: () => import('./editor/editor.routes').then((m) => m.EDITOR_ROUTES),
+  },
+  {
+    path: 'designs/:id',
+    title: 'Design',
+    loadChildren: () => import('./editor/editor.routes').then((m) => m.EDITOR_ROUTES),
+  },
+  { path: 'account', loadChildren: () => import('./account/account.routes').then((m) => m.ACCOUNT_ROUTES) },
+  {
+    path: '**',
+    title: 'Not found',
+    loadComponent: () => import('./core/shell/not-found-page').then((m) => m.NotFoundPage),
+  },
+];
