@@ -77,6 +77,18 @@ export function endOnSignal() {
   return () => listeners.forEach((remove) => remove());
 }
 
+/**
+ * Ends this process when npm is ended. npm hands a signal to the shell that it started us with, and that shell keeps it
+ * to itself: without this a server would stay behind, holding the port and the data folder.
+ */
+export function endWithNpm() {
+  const { ppid } = process;
+  if (process.env.npm_lifecycle_event === undefined || ppid === 1) return;
+  setInterval(() => {
+    if (process.ppid !== ppid) process.kill(process.pid, 'SIGTERM');
+  }, 500).unref();
+}
+
 /** Ends the process with a message for whoever gave the command. */
 export function stopWith(message) {
   process.stderr.write(`\n${message.trimEnd()}\n`);

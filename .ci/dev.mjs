@@ -1,9 +1,10 @@
 /** `npm run dev`: server and client from their sources, both reloading when a file is saved. */
 import { buildKernel } from './build.mjs';
-import { endChildren, endOnSignal, start, stopWith, tool } from './command.mjs';
+import { endChildren, endOnSignal, endWithNpm, start, stopWith, tool } from './command.mjs';
 import { install } from './install.mjs';
 
 endOnSignal();
+endWithNpm();
 await install();
 const kernel = await buildKernel();
 if (kernel.code !== 0) stopWith(kernel.output);

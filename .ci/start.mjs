@@ -3,12 +3,13 @@ import { request } from 'node:http';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { build } from './build.mjs';
-import { endOnSignal, root, stopWith } from './command.mjs';
+import { endOnSignal, endWithNpm, root, stopWith } from './command.mjs';
 import { install } from './install.mjs';
 
 const host = process.env.HOST || '127.0.0.1';
 const port = Number(process.env.PORT || 4210);
 const stopListening = endOnSignal();
+endWithNpm();
 
 await install();
 const { code, output } = await build((line) => process.stdout.write(line));
