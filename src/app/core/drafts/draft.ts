@@ -12,6 +12,8 @@ export interface Draft {
   readonly history: { readonly past: readonly Design[]; readonly future: readonly Design[] } | null;
   /** The revision that the work began from; null for a design that no server has. */
   readonly base: { readonly revision: number; readonly etag: string } | null;
+  /** The server has this very document; the draft is here for its undo, and for opening it offline. */
+  readonly isSaved?: boolean;
   /** UTC, ISO 8601. */
   readonly savedAt: string;
 }
