@@ -1,0 +1,66 @@
+import { type ChildProcessByStdio, spawn } from 'node:child_process';
+import type { Readable, Writable } from 'node:stream';
+import { fileURLToPath } from 'node:url';
+import type { Order } from './order.js';
+
+/** A process that will be killed, with its modules already loaded. */
+export class Victim {
+  readonly #process: ChildProcessByStdio<Writable, Readable, null>;
+  readonly #ended: Promise<void>;
+  #output = '';
+  #onOutput: () => void = () => undefined;
+
+  constructor() {
+    const script = fileURLToPath(import.meta.resolve('./child.ts'));
+    this.#process = spawn(process.execPath, ['--import', import.meta.resolve('tsx'), script], {
+      stdio: ['pipe', 'pipe', 'inherit'],
+      env: { ...process.env, TSX_TSCONFIG_PATH: fileURLToPath(import.meta.resolve('../../tsconfig.json')) },
+    });
+    this.#process.stdin.on('error', () => undefined);
+    this.#process.stdout.setEncoding('utf8').on('data', (text: string) => {
+      this.#output += text;
+      this.#onOutput();
+    });
+    this.#ended = new Promise((resolve) => {
+      this.#process.once('close', () => {
+        resolve();
+        this.#onOutput();
+      });
+    });
+  }
+
+  /**
+   * Lets it write, kills it when `moment`, asked for after the first acknowledgement, has come (unless it ends itself
+   * before), and gives the revision that was acknowledged of each design.
+   */
+  async run(order: Order, moment: () => Promise<void>): Promise<Map<string, number>> {
+    await this.#outputHolds('ready\n');
+    this.#output = '';
+    this.#process.stdin.write(`${JSON.stringify(order)}\n`);
+    await Promise.race([this.#outputHolds('\n'), this.#ended]);
+    await Promise.race([moment(), this.#ended]);
+    this.kill();
+    await this.#ended;
+    const acknowledged = new Map<string, number>();
+    // A last line cut short was not promised.
+    for (const line of this.#output.split('\n').slice(0, -1)) {
+      const [id = '', revision] = line.split(' ');
+      acknowledged.set(id, Number(revision));
+    }
+    return acknowledged;
+  }
+
+  kill(): void {
+    this.#process.kill('SIGKILL');
+  }
+
+  #outputHolds(text: string): Promise<void> {
+    return new Promise((resolve, reject) => {
+      this.#onOutput = () => {
+        if (this.#output.includes(text)) resolve();
+        else if (this.#process.exitCode !== null) reject(new Error('The process ended before its time.'));
+      };
+      this.#onOutput();
+    });
+  }
+}
