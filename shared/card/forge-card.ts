@@ -3,7 +3,7 @@ import type { Warning } from '../checks/index.js';
 import type { Bar, Design, Stack } from '../design/index.js';
 import { type ForgedBar, type ForgedState, type Forging, type State, figuresOf } from '../forging/index.js';
 import { type Step, kindOf } from '../steps/index.js';
-import type { Format } from '../units/index.js';
+import { type Format, formatLengthFraction } from '../units/index.js';
 import { type Caution, GENERAL_CAUTION, cautionsFor } from './cautions.js';
 import { stackRecipe } from './stack-recipe.js';
 import { forgingToleranceMm } from './tolerance.js';
@@ -146,11 +146,19 @@ function cardStep(state: ForgedState, number: number, forging: Forging, context:
 }
 
 function target(label: CardTarget['label'], axis: Axis, sizeMm: number, format: Format): CardTarget {
+  const toleranceMm = forgingToleranceMm(axis, sizeMm);
   return {
     label,
-    value: format.length(sizeMm),
-    tolerance: `± ${format.length(forgingToleranceMm(axis, sizeMm))}`,
+    value: anvilLength(axis, sizeMm, format),
+    tolerance: `± ${anvilLength(axis, toleranceMm, format)}`,
   };
+}
+
+/** A size as it is read off a rule at the anvil: lengths to 1 mm or 1/16 in, sections to 0.1 mm or 1/64 in. */
+function anvilLength(axis: Axis, sizeMm: number, format: Format): string {
+  if (axis === 'length') return format.roughLength(sizeMm);
+  if (format.system === 'mm') return format.length(sizeMm, { digits: 1 });
+  return formatLengthFraction(sizeMm, 64);
 }
 
 function heatText(step: Step, forging: Forging, format: Format): string {
@@ -162,7 +170,7 @@ function heatText(step: Step, forging: Forging, format: Format): string {
   const minutes = step.minutesPerHeat ?? allowances.minutesPerHeat;
   return [
     `${format.count(heats)} ${heats === 1 ? 'heat' : 'heats'}`,
-    `about ${format.temperature(temperatureC)}`,
+    `about ${format.temperature(temperatureC, { step: 5 })}`,
     heats === 1 ? format.duration(minutes) : `${format.duration(minutes)} each`,
   ].join(', ');
 }
