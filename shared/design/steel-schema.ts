@@ -29,7 +29,7 @@ export const steelSchema: z.ZodType<Steel> = z.strictObject({
   note: text(1_000),
   sources: z.strictObject({
     composition: z.strictObject({ text: text(1_000), status }),
-    density: z.strictObject({ status }),
-    forging: z.strictObject({ status }),
+    density: z.strictObject({ text: text(1_000).optional(), status }),
+    forging: z.strictObject({ text: text(1_000).optional(), status }),
   }),
 }) as unknown as z.ZodType<Steel>;

@@ -157,6 +157,8 @@ describe('catalogue', () => {
     const names = (id: string): string[] => designationList(findSteel(id) ?? { designations: {} });
     expect(names('1084')).toEqual(['SAE 1084', 'UNS G10840', 'EN C85S near', '1.1269 near']);
     expect(names('nickel-200')).toEqual(['UNS N02200', '2.4060/2.4066', 'ASTM B160/B162']);
+    const foreign = { en: 'C85S', gost: '85', sae: '1084' };
+    expect(designationList({ designations: foreign })).toEqual(['gost 85', 'SAE 1084', 'EN C85S']);
   });
 });
 

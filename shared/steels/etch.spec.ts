@@ -8,7 +8,7 @@ import {
   HATCHES,
   toneOf,
 } from './etch.js';
-import { ETCH_TONES, type Steel } from './steel.js';
+import { ETCH_TONES, kindWords, type Steel } from './steel.js';
 
 /**
  * Order of darkening in dilute ferric chloride, weakest attack first; steels of one row are alike.
@@ -146,6 +146,15 @@ describe('etched tone', () => {
   it('has greys at the lightness that it says', () => {
     expect(toneOf(steel('nickel-200')).hex).toBe('#e8e8e8');
     expect(toneOf(steel('90mncrv8')).hex).toBe('#282828');
+  });
+
+  it('shows what it doesn’t know as a middle grey, in the words of its document', () => {
+    const foreign = { kind: 'meteoric', composition: {}, etchTone: 'iridescent' } as unknown as Steel;
+    expect(etchClassOf(foreign)).toBe('medium-carbon');
+    expect(toneOf(foreign).words).toBe('iridescent');
+    expect(toneOf(foreign).hex).toMatch(/^#[0-9a-f]{6}$/);
+    expect(toneOf({ ...foreign, etchTone: 'constructor' } as unknown as Steel).words).toBe('constructor');
+    expect(kindWords(foreign.kind)).toBe('meteoric');
   });
 
   it('has words for every tone', () => {

@@ -82,21 +82,17 @@ const TONES_OF: Readonly<Record<EtchClass, readonly EtchTone[]>> = {
   fitting: ['n/a'],
 };
 
+const CLASS_BY_TONE: ReadonlyMap<string, EtchClass> = new Map<EtchTone, EtchClass>([
+  ['very-bright', 'high-nickel'],
+  ['bright', 'nickel-steel'],
+  ['grey', 'medium-carbon'],
+  ['dark', 'high-carbon'],
+]);
+
+/** Documents from elsewhere may hold tones that nobody knows here: those are shown as a middle grey. */
 function classByTone(steel: Etched): EtchClass {
-  switch (steel.etchTone) {
-    case 'very-bright':
-      return 'high-nickel';
-    case 'bright':
-      return 'nickel-steel';
-    case 'grey':
-      return nominalPercent(steel, 'Cr') >= 3 ? 'half-bright' : 'medium-carbon';
-    case 'dark':
-      return 'high-carbon';
-    case 'copper-red':
-      return 'copper';
-    case 'n/a':
-      return 'fitting';
-  }
+  if (steel.etchTone === 'grey' && nominalPercent(steel, 'Cr') >= 3) return 'half-bright';
+  return CLASS_BY_TONE.get(steel.etchTone) ?? 'medium-carbon';
 }
 
 /**
@@ -218,14 +214,14 @@ export interface Tone {
   readonly hex: string;
 }
 
-const TONE_WORDS: Readonly<Record<EtchTone, string>> = {
-  'very-bright': 'very bright',
-  bright: 'bright',
-  grey: 'grey',
-  dark: 'dark',
-  'copper-red': 'copper red',
-  'n/a': 'not etched',
-};
+const TONE_WORDS: ReadonlyMap<string, string> = new Map<EtchTone, string>([
+  ['very-bright', 'very bright'],
+  ['bright', 'bright'],
+  ['grey', 'grey'],
+  ['dark', 'dark'],
+  ['copper-red', 'copper red'],
+  ['n/a', 'not etched'],
+]);
 
 /** CIE lightness of the blackest and the brightest tone. Equal steps of brightness look equal. */
 const LIGHTNESS = { darkest: 16, brightest: 92 } as const;
@@ -238,7 +234,7 @@ export function toneOf(steel: Etched): Tone {
   const hex = `#${rgb.map((channel) => channel.toString(16).padStart(2, '0')).join('')}`;
   return {
     name: steel.etchTone,
-    words: TONE_WORDS[steel.etchTone],
+    words: TONE_WORDS.get(steel.etchTone) ?? steel.etchTone,
     brightness,
     hatch: hatchOf(steel),
     rgb,

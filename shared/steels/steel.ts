@@ -107,7 +107,11 @@ export interface Steel {
   readonly forging: { readonly startMaxC: number; readonly finishMinC: number };
   /** What a smith should know about it; may be empty. */
   readonly note: string;
-  readonly sources: { readonly composition: Source; readonly density: Source; readonly forging: Source };
+  readonly sources: {
+    readonly composition: Required<Source>;
+    readonly density: Source;
+    readonly forging: Source;
+  };
 }
 
 /** Nominal content in wt%; 0 where the composition doesn't speak of the element. */
@@ -120,47 +124,46 @@ export function isReclaimed(steel: Pick<Steel, 'kind'>): boolean {
   return steel.kind === 'reclaimed';
 }
 
-const KIND_WORDS: Readonly<Record<SteelKind, string>> = {
-  carbon: 'carbon steel',
-  'carbon-tool': 'carbon tool steel',
-  'cold-work-tool': 'cold-work tool steel',
-  'hot-work-tool': 'hot-work tool steel',
-  'shock-tool': 'shock-resisting tool steel',
-  'low-alloy-tool': 'low-alloy tool steel',
-  'low-alloy': 'low-alloy steel',
-  spring: 'spring steel',
-  bearing: 'bearing steel',
-  'structural-Ni': 'nickel plate steel',
-  'martensitic-stainless': 'martensitic stainless steel',
-  'austenitic-stainless': 'austenitic stainless steel',
-  iron: 'iron',
-  nickel: 'nickel',
-  reclaimed: 'reclaimed, composition unknown',
-  powder: 'steel powder',
-  'non-ferrous': 'non-ferrous metal',
-  fitting: 'metal for fittings',
-};
+const KIND_WORDS: ReadonlyMap<string, string> = new Map<SteelKind, string>([
+  ['carbon', 'carbon steel'],
+  ['carbon-tool', 'carbon tool steel'],
+  ['cold-work-tool', 'cold-work tool steel'],
+  ['hot-work-tool', 'hot-work tool steel'],
+  ['shock-tool', 'shock-resisting tool steel'],
+  ['low-alloy-tool', 'low-alloy tool steel'],
+  ['low-alloy', 'low-alloy steel'],
+  ['spring', 'spring steel'],
+  ['bearing', 'bearing steel'],
+  ['structural-Ni', 'nickel plate steel'],
+  ['martensitic-stainless', 'martensitic stainless steel'],
+  ['austenitic-stainless', 'austenitic stainless steel'],
+  ['iron', 'iron'],
+  ['nickel', 'nickel'],
+  ['reclaimed', 'reclaimed, composition unknown'],
+  ['powder', 'steel powder'],
+  ['non-ferrous', 'non-ferrous metal'],
+  ['fitting', 'metal for fittings'],
+]);
 
-/** A family of materials in words. */
+/** A family of materials in words; one that nobody knows here as it is written in its document. */
 export function kindWords(kind: SteelKind): string {
-  return KIND_WORDS[kind];
+  return KIND_WORDS.get(kind) ?? kind;
 }
 
-const DESIGNATION_WORDS: Readonly<Record<keyof Designations, string>> = {
-  sae: 'SAE ',
-  aisi: 'AISI ',
-  uns: 'UNS ',
-  en: 'EN ',
-  wnr: '',
-  astm: 'ASTM ',
-  other: '',
-};
+const DESIGNATION_WORDS: ReadonlyMap<string, string> = new Map<keyof Designations, string>([
+  ['sae', 'SAE '],
+  ['aisi', 'AISI '],
+  ['uns', 'UNS '],
+  ['en', 'EN '],
+  ['wnr', ''],
+  ['astm', 'ASTM '],
+  ['other', ''],
+]);
 
 /** The names under which a material is sold: `SAE 1084`, `UNS G10840`, `EN C85S near`, `1.1269 near`. */
 export function designationList(steel: Pick<Steel, 'designations'>): string[] {
-  const order = Object.keys(DESIGNATION_WORDS) as (keyof Designations)[];
-  return order.flatMap((system) => {
-    const name = steel.designations[system];
-    return name === undefined ? [] : [DESIGNATION_WORDS[system] + name];
-  });
+  const order = [...DESIGNATION_WORDS.keys()];
+  return (Object.entries(steel.designations) as [string, string][])
+    .sort(([one], [other]) => order.indexOf(one) - order.indexOf(other))
+    .map(([system, name]) => (DESIGNATION_WORDS.get(system) ?? `${system} `) + name);
 }

@@ -21,22 +21,22 @@ export function about(nominalPercent: number): Content {
 }
 
 /** Read in a public text, data sheet or table. */
-export function published(text: string): Source {
+export function published(text: string): Required<Source> {
   return { text, status: 'published' };
 }
 
 /** Some of the numbers were read in public, the rest not. */
-export function partly(text: string): Source {
+export function partly(text: string): Required<Source> {
   return { text, status: 'partly published' };
 }
 
 /** Known from the named work, which was not at hand. */
-export function memory(text: string): Source {
+export function memory(text: string): Required<Source> {
   return { text, status: 'from memory: source to be confirmed' };
 }
 
 /** What smiths reckon with; nobody measured it. */
-export function practice(text: string): Source {
+export function practice(text: string): Required<Source> {
   return { text, status: 'common practice, no source' };
 }
 
