@@ -15,6 +15,7 @@ export { rimRadiusMm, roundDepthMm } from './relief.js';
 export type { ReliefFaces, ReliefFinish } from './relief.js';
 export * from './step-kind.js';
 export * from './table.js';
+export { traceStep } from './trace.js';
 export type { Corner } from './corner/index.js';
 export type { Dimple } from './dimple/index.js';
 export type { Draw } from './draw/index.js';

@@ -1,4 +1,4 @@
-import { type BarState, NO_LOSSES, resized, volumeMm3 } from '../bar/index.js';
+import { type BarState, NO_LOSSES, type ReliefColumn, resized, volumeMm3 } from '../bar/index.js';
 import { type ForgeResult, forgedTo, refuse } from './step-kind.js';
 
 /** Which faces are worked, and whether the back is worked half a pitch along. */
@@ -46,6 +46,31 @@ export function forgeRelief(bar: BarState, step: ReliefStep, faceVolumeMm3: Face
     bar: resized(bar, bar.lengthMm, bar.widthMm, thicknessMm),
     lossesMm3: { ...NO_LOSSES, [cause]: removedMm3 },
     eatenLayers: { scale: 0, grinding: 0 },
+  };
+}
+
+/**
+ * How far back each column of metal reaches. Cut and forged flat: up to the bottom of the cut. Pressed in and ground
+ * flat: the bar's own face shows at the middle of each print, `depthMm` deeper metal beside it.
+ */
+export function reliefColumn(
+  step: ReliefStep & { readonly radiusMm: number; readonly pitchMm: number },
+  earlier: BarState,
+  later: BarState,
+): ReliefColumn {
+  const isPressed = step.finish === 'grindFlat';
+  const isBottomWorked = step.faces !== 'top';
+  return {
+    thicknessMm: later.thicknessMm,
+    topMm: earlier.thicknessMm - (isPressed ? step.depthMm : 0),
+    topSign: isPressed ? 1 : -1,
+    bottomMm: isPressed && isBottomWorked ? step.depthMm : 0,
+    bottomSign: isBottomWorked ? (isPressed ? -1 : 1) : 0,
+    isBottomShifted: step.faces === 'bothStaggered',
+    depthMm: step.depthMm,
+    radiusMm: step.radiusMm,
+    pitchMm: step.pitchMm,
+    middleMm: earlier.widthMm / 2,
   };
 }
 

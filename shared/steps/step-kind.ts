@@ -4,6 +4,7 @@ import {
   type CutShort,
   type Losses,
   NO_LOSSES,
+  type TraceOp,
   cutBar,
   fromEveryFace,
   isCutShort,
@@ -67,6 +68,13 @@ export interface StepKind<S extends StepBase & { readonly kind: string }> {
   readonly propose: (bar: BarState) => Omit<S, 'id'>;
   /** The bar after the step; `bar` has already lost the scale of the step's heats. */
   readonly forge: (bar: BarState, step: S, allowances: Allowances) => ForgeResult;
+  /** The way back of a point, in the order in which ops are applied; `earlier` has already lost the scale of the heats. */
+  readonly trace: (
+    step: S,
+    earlier: BarState,
+    later: BarState,
+    allowances: Allowances,
+  ) => readonly TraceOp[];
   readonly words: StepWords<S>;
 }
 

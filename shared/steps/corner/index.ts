@@ -1,6 +1,7 @@
 import { stepSchema, type StepOf } from '../field.js';
 import { type StepKind, forgedTo } from '../step-kind.js';
 import { turnedInSection } from '../twist/index.js';
+import { traceCorner } from './trace.js';
 
 export type Corner = StepOf<'corner', Record<never, never>>;
 
@@ -11,6 +12,7 @@ export const corner: StepKind<Corner> = {
   usualHeats: 3,
   propose: () => ({ kind: 'corner', heats: 3 }),
   forge: (bar) => forgedTo(turnedInSection(bar)),
+  trace: traceCorner,
   words: {
     name: 'Forge on the corners',
     purpose:

@@ -3,6 +3,7 @@ import { forgeRelief } from '../relief.js';
 import type { StepKind } from '../step-kind.js';
 import { type Dimple, dimpleFields } from './fields.js';
 import { dimpleVolumeMm3 } from './volume.js';
+import { traceDimple } from './trace.js';
 
 export type { Dimple } from './fields.js';
 export { dimpleMiddle, latticeHash } from './lattice.js';
@@ -26,6 +27,7 @@ export const dimple: StepKind<Dimple> = {
     finish: 'forgeFlat',
   }),
   forge: (bar, step) => forgeRelief(bar, step, (state, isShifted) => dimpleVolumeMm3(state, step, isShifted)),
+  trace: traceDimple,
   words: {
     name: 'Dimple (raindrop)',
     purpose: 'Drill or press round pits and make the bar flat again: the layers show as rings.',

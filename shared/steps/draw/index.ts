@@ -3,9 +3,11 @@ import { stepSchema } from '../field.js';
 import type { StepKind } from '../step-kind.js';
 import { type Draw, drawFields } from './fields.js';
 import { type TargetSize, drawTo } from './forge.js';
+import { traceDraw } from './trace.js';
 
 export { drawTo, type TargetSize } from './forge.js';
 export type { Draw } from './fields.js';
+export { traceDraw } from './trace.js';
 
 export const draw: StepKind<Draw> = {
   kind: 'draw',
@@ -14,6 +16,7 @@ export const draw: StepKind<Draw> = {
   usualHeats: 3,
   propose: (bar) => ({ kind: 'draw', heats: 3, thicknessMm: Math.max(1, Math.round(bar.thicknessMm / 2)) }),
   forge: (bar, step) => drawTo(bar, step),
+  trace: traceDraw,
   words: {
     name: 'Draw out',
     purpose:

@@ -2,6 +2,7 @@ import { stepSchema } from '../field.js';
 import type { StepKind } from '../step-kind.js';
 import { type Fold, foldFields } from './fields.js';
 import { foldBar } from './forge.js';
+import { traceFold } from './trace.js';
 
 export type { Fold } from './fields.js';
 
@@ -12,6 +13,7 @@ export const fold: StepKind<Fold> = {
   usualHeats: 1,
   propose: () => ({ kind: 'fold', heats: 1 }),
   forge: foldBar,
+  trace: traceFold,
   words: {
     name: 'Fold',
     purpose:

@@ -1,21 +1,10 @@
 import { NO_LOSSES, NO_REMOVAL, cutBar, fromEveryFace, isCutShort } from '../../bar/index.js';
-import { type Fields, type StepOf, stepSchema } from '../field.js';
+import { stepSchema } from '../field.js';
 import { type StepKind, refuseCut } from '../step-kind.js';
+import { type Grind, grindFields } from './fields.js';
+import { traceGrind } from './trace.js';
 
-const grindFields = {
-  perFaceMm: { type: 'length', label: 'Off each face', min: 0, max: 200, initial: 0.5 },
-  faces: {
-    type: 'choice',
-    label: 'Faces',
-    initial: 'flats',
-    options: [
-      { value: 'flats', label: 'The flats: top and bottom' },
-      { value: 'all', label: 'All six faces' },
-    ],
-  },
-} as const satisfies Fields;
-
-export type Grind = StepOf<'grind', typeof grindFields>;
+export type { Grind } from './fields.js';
 
 export const grind: StepKind<Grind> = {
   kind: 'grind',
@@ -33,6 +22,7 @@ export const grind: StepKind<Grind> = {
       eatenLayers: { scale: 0, grinding: cut.eatenLayers },
     };
   },
+  trace: traceGrind,
   words: {
     name: 'Grind clean',
     purpose: 'Grind scale and decarburised skin off the faces.',

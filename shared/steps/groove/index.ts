@@ -3,6 +3,7 @@ import { forgeRelief } from '../relief.js';
 import type { StepKind } from '../step-kind.js';
 import { type Groove, grooveFields } from './fields.js';
 import { grooveVolumeMm3 } from './volume.js';
+import { traceGroove } from './trace.js';
 
 export type { Groove } from './fields.js';
 
@@ -23,6 +24,7 @@ export const groove: StepKind<Groove> = {
     finish: 'forgeFlat',
   }),
   forge: (bar, step) => forgeRelief(bar, step, (state, isShifted) => grooveVolumeMm3(state, step, isShifted)),
+  trace: traceGroove,
   words: {
     name: 'Groove (ladder)',
     purpose: 'Cut or press grooves across the bar and make it flat again: the layers show as rungs.',

@@ -2,6 +2,7 @@ import { stepSchema } from '../field.js';
 import type { StepKind } from '../step-kind.js';
 import { type Restack, restackFields } from './fields.js';
 import { restackBar } from './forge.js';
+import { traceRestack } from './trace.js';
 
 export type { Restack } from './fields.js';
 
@@ -12,6 +13,7 @@ export const restack: StepKind<Restack> = {
   usualHeats: 0,
   propose: () => ({ kind: 'restack', pieces: 4, turnAlternate: false }),
   forge: restackBar,
+  trace: traceRestack,
   words: {
     name: 'Restack',
     purpose: 'Cut the bar across into equal lengths, clean the faces and stack them: the layers multiply.',

@@ -2,6 +2,7 @@ import { stepSchema } from '../field.js';
 import type { StepKind } from '../step-kind.js';
 import { type Slice, sliceFields } from './fields.js';
 import { sliceBar } from './forge.js';
+import { traceSlice } from './trace.js';
 
 export type { Slice } from './fields.js';
 
@@ -20,6 +21,7 @@ export const slice: StepKind<Slice> = {
     };
   },
   forge: sliceBar,
+  trace: traceSlice,
   words: {
     name: 'Slice across',
     purpose: 'Cut slices off the end and lay them in a row, end grain up.',

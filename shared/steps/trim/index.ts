@@ -1,12 +1,10 @@
 import { NO_LOSSES, NO_REMOVAL, cutBar, isCutShort } from '../../bar/index.js';
-import { type Fields, type StepOf, stepSchema } from '../field.js';
+import { stepSchema } from '../field.js';
 import { type StepKind, refuseCut } from '../step-kind.js';
+import { type Trim, trimFields } from './fields.js';
+import { traceTrim } from './trace.js';
 
-const trimFields = {
-  perEndMm: { type: 'length', label: 'Off each end', min: 0, max: 2_000, initial: 5 },
-} as const satisfies Fields;
-
-export type Trim = StepOf<'trim', typeof trimFields>;
+export type { Trim } from './fields.js';
 
 export const trim: StepKind<Trim> = {
   kind: 'trim',
@@ -23,6 +21,7 @@ export const trim: StepKind<Trim> = {
       eatenLayers: { scale: 0, grinding: 0 },
     };
   },
+  trace: traceTrim,
   words: {
     name: 'Trim the ends',
     purpose: 'Crop ragged or unwelded ends.',

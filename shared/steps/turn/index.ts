@@ -2,6 +2,7 @@ import { quarterTurned, stoodOnEnd } from '../../bar/index.js';
 import { stepSchema } from '../field.js';
 import { type StepKind, forgedTo } from '../step-kind.js';
 import { type Turn, turnFields } from './fields.js';
+import { traceTurn } from './trace.js';
 
 export type { Turn } from './fields.js';
 
@@ -12,6 +13,7 @@ export const turn: StepKind<Turn> = {
   usualHeats: 0,
   propose: () => ({ kind: 'turn', onto: 'edge' }),
   forge: (bar, step) => forgedTo(step.onto === 'edge' ? quarterTurned(bar) : stoodOnEnd(bar)),
+  trace: traceTurn,
   words: {
     name: 'Turn',
     purpose: 'Lay the bar another way round, so that the next step works on its edge or its end.',

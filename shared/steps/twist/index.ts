@@ -2,6 +2,7 @@ import { type BarState, isSolid } from '../../bar/index.js';
 import { stepSchema } from '../field.js';
 import { type StepKind, forgedTo } from '../step-kind.js';
 import { type Twist, twistFields } from './fields.js';
+import { traceTwist } from './trace.js';
 
 export type { Twist } from './fields.js';
 
@@ -12,6 +13,7 @@ export const twist: StepKind<Twist> = {
   usualHeats: 3,
   propose: (bar) => ({ kind: 'twist', heats: 3, turns: usualTurns(bar), hand: 'right', reversals: 0 }),
   forge: (bar) => forgedTo(turnedInSection(bar)),
+  trace: traceTwist,
   words: {
     name: 'Twist',
     purpose: 'Twist a square or round bar about its length; ground into, it shows stars and waves.',

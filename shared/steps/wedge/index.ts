@@ -1,6 +1,7 @@
 import { stepSchema } from '../field.js';
 import { type StepKind, forgedTo, refuse } from '../step-kind.js';
 import { type Wedge, wedgeFields } from './fields.js';
+import { traceWedge } from './trace.js';
 
 export type { Wedge } from './fields.js';
 
@@ -21,6 +22,7 @@ export const wedge: StepKind<Wedge> = {
     step.dragMm >= bar.thicknessMm
       ? refuse('cut-too-deep', 'dragMm', step.dragMm, bar.thicknessMm)
       : forgedTo({ ...bar, openSeams: bar.openSeams + 1 }),
+  trace: traceWedge,
   words: {
     name: 'Split with the wedge',
     purpose:

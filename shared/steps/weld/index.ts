@@ -2,6 +2,7 @@ import { drawTo, sizeWords } from '../draw/index.js';
 import { stepSchema } from '../field.js';
 import { type StepKind, isRefused } from '../step-kind.js';
 import { type Weld, weldFields } from './fields.js';
+import { traceWeld } from './trace.js';
 
 export type { Weld } from './fields.js';
 
@@ -15,6 +16,7 @@ export const weld: StepKind<Weld> = {
     const pressed = drawTo(bar, { widthMm: step.widthMm, thicknessMm: step.thicknessMm });
     return isRefused(pressed) ? pressed : { ...pressed, bar: { ...pressed.bar, openSeams: 0 } };
   },
+  trace: traceWeld,
   words: {
     name: 'Forge weld',
     purpose: 'Set the seams of what was put together; with a size, press it to that size as well.',
