@@ -1,7 +1,6 @@
 export * from './format.js';
 export * from './length-format.js';
 export * from './length-parse.js';
-export * from './length-step.js';
 export {
   formatCount,
   formatNumber,

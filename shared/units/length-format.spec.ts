@@ -8,7 +8,6 @@ import {
   lengthParts,
   nearestInchFraction,
 } from './length-format.js';
-import { steppedLength } from './length-step.js';
 
 describe('formatLength in millimetres', () => {
   const cases: readonly (readonly [number, string])[] = [
@@ -139,38 +138,5 @@ describe('formatSize', () => {
     expect(formatSize([150, 25, 50.04], 'mm')).toBe('150 × 25 × 50 mm');
     expect(formatSize([152.4, 25.4, 50.00625], 'inch')).toBe('6 × 1 × 1 31/32 in');
     expect(formatSize([], 'mm')).toBe('');
-  });
-});
-
-describe('steppedLength', () => {
-  it('goes along a grid that suits the size', () => {
-    expect(steppedLength(2.4, 'mm', 1)).toBe(2.5);
-    expect(steppedLength(2.43, 'mm', 1)).toBe(2.5);
-    expect(steppedLength(2.43, 'mm', -1)).toBe(2.4);
-    expect(steppedLength(0.5, 'mm', 1)).toBe(0.55);
-    expect(steppedLength(10, 'mm', 1)).toBe(11);
-    expect(steppedLength(10, 'mm', -1)).toBe(9.9);
-    expect(steppedLength(150, 'mm', 1)).toBe(155);
-    expect(steppedLength(2.38125, 'inch', 1)).toBe((127 * 7) / 320);
-    expect(steppedLength(2.4, 'inch', -1)).toBe(2.38125);
-    expect(steppedLength(25.4, 'inch', 1)).toBe(26.9875);
-    expect(steppedLength(254, 'inch', 1)).toBe(260.35);
-  });
-
-  it('never goes below nothing and adds no rounding', () => {
-    expect(steppedLength(0.05, 'mm', -3)).toBe(0);
-    expect(steppedLength(1, 'mm', 10)).toBe(2);
-    expect(steppedLength(0, 'mm', 20)).toBe(1);
-    expect(steppedLength(0, 'inch', 32)).toBe(12.7);
-  });
-
-  it('comes back from where it went', () => {
-    fc.assert(
-      fc.property(fc.integer({ min: 1, max: 400 }), fc.constantFrom('mm', 'inch'), (presses, system) => {
-        const there = steppedLength(0, system, presses);
-        expect(steppedLength(there, system, -presses)).toBe(0);
-      }),
-      { seed: 5, numRuns: 500 },
-    );
   });
 });

@@ -249,6 +249,7 @@ describe('a length written and read back', () => {
     expect(readLengthField(' 0.094 in ', shown, 'inch')).toEqual({ ok: true, mm: 2.4 });
     expect(readLengthField('0.095 in', shown, 'inch')).toEqual({ ok: true, mm: 2.413 });
     expect(readLengthField('x', shown, 'inch').ok).toBeFalse();
+    expect(readLengthField('', { text: '', mm: NaN }, 'inch').ok).toBeFalse();
   });
 });
 

@@ -79,14 +79,15 @@ export function parseLength(text: string, system: UnitSystem): ParsedLength {
 /**
  * What a field holds after it was left: the very same length if its text is still the one that was shown, so that
  * looking at 2.4 mm in inches doesn't make it 0.094 in; else what {@link parseLength} reads.
- * @param shown what stood in the field and the length behind it
+ * @param shown what stood in the field and the length behind it; NaN for a field that held none
  */
 export function readLengthField(
   text: string,
   shown: { readonly text: string; readonly mm: number },
   system: UnitSystem,
 ): ParsedLength {
-  return text.trim() === shown.text.trim() ? { ok: true, mm: shown.mm } : parseLength(text, system);
+  const isUntouched = Number.isFinite(shown.mm) && text.trim() === shown.text.trim();
+  return isUntouched ? { ok: true, mm: shown.mm } : parseLength(text, system);
 }
 
 interface Quantity extends Ratio {
