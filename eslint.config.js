@@ -165,6 +165,8 @@ export default defineConfig(
     processor: angular.processInlineTemplates,
     rules: {
       'no-console': 'error',
+      // `http.delete<void>()` is how Angular says that an answer has no body.
+      '@typescript-eslint/no-invalid-void-type': 'off',
       '@angular-eslint/component-selector': ['error', { type: 'element', prefix: 'lw', style: 'kebab-case' }],
       '@angular-eslint/directive-selector': [
         'error',
