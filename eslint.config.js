@@ -104,7 +104,7 @@ export default defineConfig(
       '@typescript-eslint/no-unsafe-class-instance-assignment': 'off',
       '@typescript-eslint/no-unsafe-enum-assignment': 'off',
       // A string spread into its characters is fine where the text is ours: figures, fractions, units.
-      '@typescript-eslint/no-misused-spread': ['error', { allow: ['string'] }],
+      '@typescript-eslint/no-misused-spread': 'off',
       '@typescript-eslint/no-unnecessary-condition': [
         'error',
         { allowConstantLoopConditions: 'only-allowed-literals' },

@@ -35,7 +35,8 @@ const features = ['bench', 'editor', 'planner', 'steels', 'rack', 'anvil', 'shop
 const clientPackages = '@angular/|rxjs/|tslib/|zod/|idb/|file-saver/|qrcode/|@material-symbols/|three/';
 const serverNever = '@angular/|rxjs/|konva/|three/|idb/|file-saver/|@material-symbols/|zone\\.js/';
 
-const spec = '\\.spec\\.ts$|/testing/';
+/** Specs, fakes and builders, and the programs that the crash test kills. */
+const spec = '\\.spec\\.ts$|\\btesting/|\\bcrash/';
 const index = '/index\\.ts$';
 const anyOf = (names) => `(?:${names.join('|')})`;
 const installed = (packages) => `node_modules/(?:@types/)?(?:${packages})`;
