@@ -1,4 +1,4 @@
-import type { z } from 'zod';
+import type * as z from 'zod';
 import { findSteel } from '../steels/index.js';
 import { DESIGN_FORMAT, DESIGN_VERSION, type Design, designSchema } from './schema.js';
 

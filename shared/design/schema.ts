@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import type { Steel } from '../steels/index.js';
 import { ALLOWANCE_DEFAULTS, type Allowances, type Step, stepSchema } from '../steps/index.js';
 import { LIMIT_DEFAULTS, type ShopLimits } from './limits.js';

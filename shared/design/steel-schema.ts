@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import type { Steel } from '../steels/index.js';
 
 const percent = z.number().min(0).max(100);

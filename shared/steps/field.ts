@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** What every field of a step has: its label, whether it may be left out, and what it is for. */
 interface FieldBase {

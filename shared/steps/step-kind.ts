@@ -1,4 +1,4 @@
-import type { z } from 'zod';
+import type * as z from 'zod';
 import {
   type BarState,
   type CutShort,
@@ -69,12 +69,7 @@ export interface StepKind<S extends StepBase & { readonly kind: string }> {
   /** The bar after the step; `bar` has already lost the scale of the step's heats. */
   readonly forge: (bar: BarState, step: S, allowances: Allowances) => ForgeResult;
   /** The way back of a point, in the order in which ops are applied; `earlier` has already lost the scale of the heats. */
-  readonly trace: (
-    step: S,
-    earlier: BarState,
-    later: BarState,
-    allowances: Allowances,
-  ) => readonly TraceOp[];
+  readonly trace: (step: S, earlier: BarState, later: BarState, allowances: Allowances) => readonly TraceOp[];
   readonly words: StepWords<S>;
 }
 

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { type Corner, corner } from './corner/index.js';
 import { type Dimple, dimple } from './dimple/index.js';
 import { type Draw, draw } from './draw/index.js';
