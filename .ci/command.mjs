@@ -25,16 +25,21 @@ export function node(args, options = {}) {
   return run(process.execPath, args, options);
 }
 
+/** The longest that anything here may take, ms; what takes longer hangs. */
+const patienceMs = 12 * 60_000;
+
 /**
- * Runs a program to its end. `show: true` lets it write to the terminal instead of collecting its output.
+ * Runs a program to its end and collects what it prints.
  * @returns {Promise<{ code: number, output: string }>}
  */
-export function run(program, args, { env = {}, cwd = root, show = false } = {}) {
+export function run(program, args, { env = {}, cwd = root } = {}) {
   return new Promise((resolve) => {
-    const child = start(program, args, { env, cwd, stdio: show ? 'inherit' : ['ignore', 'pipe', 'pipe'] });
+    const child = start(program, args, { env, cwd, stdio: ['ignore', 'pipe', 'pipe'] });
     const parts = [];
-    child.stdout?.on('data', (part) => parts.push(part));
-    child.stderr?.on('data', (part) => parts.push(part));
+    child.stdout.on('data', (part) => parts.push(part));
+    child.stderr.on('data', (part) => parts.push(part));
+    const timer = setTimeout(() => child.kill('SIGKILL'), patienceMs);
+    child.on('close', () => clearTimeout(timer));
     child.on('error', (error) =>
       resolve({ code: 1, output: `${program} could not be started: ${error.message}\n` }),
     );

@@ -58,10 +58,14 @@ export const quickStages = [
   jasmine('server specs', 'server', 'server/tsconfig.spec.json', 'kernel'),
 ];
 
-/** What takes a browser or the built application. The longest come first. */
+const isKernel = ({ name }) => name === 'kernel';
+const isSpecs = ({ name }) => name.includes('specs in Node') || name === 'server specs';
+
+/** Everything. What takes longest starts first. */
 export const fullStages = [
-  ...quickStages.filter(({ name }) => name === 'kernel'),
+  ...quickStages.filter(isKernel),
   { name: 'build', after: 'kernel', run: () => build() },
+  ...quickStages.filter(isSpecs).reverse(),
   {
     name: 'client and shared specs in Chromium',
     specs: true,
@@ -71,8 +75,8 @@ export const fullStages = [
         env: { NG_CLI_ANALYTICS: 'false' },
       }),
   },
-  ...quickStages.filter(({ name }) => name !== 'kernel'),
   jasmine('journeys in Chromium', 'e2e', 'e2e/tsconfig.json', 'build'),
+  ...quickStages.filter((stage) => !isKernel(stage) && !isSpecs(stage)),
 ];
 
 /**
