@@ -103,8 +103,8 @@ export class BuiltApp {
   }
 }
 
-/** A port that nobody listens on right now. */
-function freePort(): Promise<number> {
+/** A loopback port that nobody listens on right now. */
+export function freePort(): Promise<number> {
   return new Promise((resolve, reject) => {
     const server = createServer();
     server.once('error', reject);
