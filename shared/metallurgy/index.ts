@@ -1,4 +1,5 @@
 export * from './band-thickness.js';
+export * from './bands-in-result.js';
 export * from './carbon-activity.js';
 export * from './carbon-balance.js';
 export * from './carbon-diffusion.js';
