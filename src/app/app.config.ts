@@ -13,13 +13,17 @@ import { csrfInterceptor } from './core/http/csrf-interceptor';
 import { problemInterceptor } from './core/http/problem-interceptor';
 import { provideIcons } from './core/icons/provide-icons';
 import { SHELL_ICONS } from './core/icons/shell-icons';
+import { expiredSessionInterceptor } from './core/session/expired-session-interceptor';
 import { PageTitle } from './core/shell/page-title';
 
 export const appConfig: ApplicationConfig = {
   providers: [
     provideBrowserGlobalErrorListeners(),
     { provide: ErrorHandler, useClass: AppErrorHandler },
-    provideHttpClient(withFetch(), withInterceptors([problemInterceptor, csrfInterceptor])),
+    provideHttpClient(
+      withFetch(),
+      withInterceptors([expiredSessionInterceptor, problemInterceptor, csrfInterceptor]),
+    ),
     provideRouter(
       routes,
       withComponentInputBinding(),

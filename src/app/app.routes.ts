@@ -4,8 +4,7 @@ export const routes: Routes = [
   {
     path: '',
     pathMatch: 'full',
-    title: 'Bench',
-    loadComponent: () => import('./bench/bench-page').then((m) => m.BenchPage),
+    loadChildren: () => import('./bench/bench.routes').then((m) => m.BENCH_ROUTES),
   },
   {
     path: 'draft',

@@ -8,7 +8,7 @@ export type Appearance = (typeof APPEARANCES)[number];
 @Injectable({ providedIn: 'root' })
 export class AppearanceStore {
   private readonly settings = inject(Settings);
-  private readonly root = inject(DOCUMENT).documentElement;
+  private readonly document = inject(DOCUMENT);
   private readonly chosen = signal<Appearance>(this.settings.read('appearance', APPEARANCES) ?? 'system');
 
   readonly appearance = this.chosen.asReadonly();
@@ -16,8 +16,9 @@ export class AppearanceStore {
   constructor() {
     effect(() => {
       const appearance = this.chosen();
-      if (appearance === 'system') delete this.root.dataset['appearance'];
-      else this.root.dataset['appearance'] = appearance;
+      const { dataset } = this.document.documentElement;
+      if (appearance === 'system') delete dataset['appearance'];
+      else dataset['appearance'] = appearance;
     });
   }
 

@@ -28,6 +28,11 @@ export class ProblemError extends Error {
     return this.status === 0;
   }
 
+  /** Nothing is wrong with what was asked: the same request may be done in a moment. */
+  get isPassing(): boolean {
+    return this.isOffline || this.status === 429 || this.status === 503;
+  }
+
   /** The first message about a field, if the server named it. */
   issueAt(pointer: string): string | undefined {
     return this.issues.find((issue) => issue.pointer === pointer)?.message;

@@ -2,6 +2,7 @@ import { HttpErrorResponse, type HttpInterceptorFn, HttpResponse } from '@angula
 import { inject } from '@angular/core';
 import { catchError, tap, throwError } from 'rxjs';
 import { ConnectionStore } from './connection-store';
+import { ProblemError } from './problem-error';
 import { problemOf } from './problem-of';
 
 /** Turns every failed request into a {@link ProblemError}, and keeps track of whether the server can be reached. */
@@ -12,8 +13,8 @@ export const problemInterceptor: HttpInterceptorFn = (request, next) => {
       if (event instanceof HttpResponse) connection.answered();
     }),
     catchError((error: unknown) => {
-      if (!(error instanceof HttpErrorResponse)) return throwError(() => error);
-      const problem = problemOf(error);
+      const problem = error instanceof HttpErrorResponse ? problemOf(error) : error;
+      if (!(problem instanceof ProblemError)) return throwError(() => problem);
       if (problem.isOffline) connection.failed();
       else connection.answered();
       return throwError(() => problem);
