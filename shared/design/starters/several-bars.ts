@@ -86,7 +86,7 @@ export const fiveBars: Starter = {
       stackBar(
         'edge',
         'Edge bar',
-        { lengthMm: 70, widthMm: 30, layers: pair(steel('1095', 2.5), steel('15n20', 1.5), 6) },
+        { lengthMm: 58, widthMm: 30, layers: pair(steel('1095', 2.5), steel('15n20', 1.5), 6) },
         [
           { kind: 'weld', heats: 2 },
           { kind: 'draw', heats: 4, widthMm: 30, thicknessMm: 10 },
