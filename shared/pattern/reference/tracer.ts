@@ -1,0 +1,124 @@
+import { CODE_WORDS, OP, PIECE_WORDS, type Program, SEGMENT_WORDS, START } from '../program/program.js';
+import type { Tracer } from '../tracer.js';
+import { cornerBack, dimpleBack, grooveBack, twistBack, unevenBack, wedgeBack } from './bent-ops.js';
+import { layerAt } from './layers.js';
+import { type OpBack, type Points, affineBack, foldBack, restackBack, sliceBack } from './solid-ops.js';
+
+/** Points in a batch: three coordinates of them stay in the first-level cache. */
+const CAPACITY = 2048;
+
+const BACK: Readonly<Record<number, OpBack>> = {
+  [OP.affine]: affineBack,
+  [OP.restack]: restackBack,
+  [OP.fold]: foldBack,
+  [OP.slice]: sliceBack,
+  [OP.twist]: twistBack,
+  [OP.corner]: cornerBack,
+  [OP.groove]: grooveBack,
+  [OP.dimple]: dimpleBack,
+  [OP.wedge]: wedgeBack,
+  [OP.uneven]: unevenBack,
+};
+
+/** A tracer in plain arithmetic, double precision: what the kernel is held against, and what takes over from it. */
+export function referenceTracer(program: Program, capacity = CAPACITY): Tracer {
+  const x = new Float64Array(capacity);
+  const y = new Float64Array(capacity);
+  const z = new Float64Array(capacity);
+  const points: Points = { x, y, z };
+  const layer = new Uint16Array(capacity);
+  const entry = program.entry * SEGMENT_WORDS;
+  return {
+    program,
+    engine: 'reference',
+    capacity,
+    x,
+    y,
+    z,
+    layer,
+    run: (count, fromOp = 0) => traceSegment(program, entry, points, layer, count, fromOp),
+    begin: (count, ops) => {
+      const first = program.segments[entry] as number;
+      return traceOps(program, points, first, first + ops, count);
+    },
+  };
+}
+
+function traceOps(program: Program, points: Points, first: number, end: number, count: number): number {
+  const { code, params } = program;
+  for (let op = first; op < end; op++) {
+    const back = BACK[code[op * CODE_WORDS] as number] as OpBack;
+    back(points, params, code[op * CODE_WORDS + 1] as number, 0, count);
+  }
+  return (end - first) * count;
+}
+
+function traceSegment(
+  program: Program,
+  segment: number,
+  points: Points,
+  layer: Uint16Array,
+  count: number,
+  skip: number,
+): number {
+  const { segments, layerTopMm } = program;
+  const first = (segments[segment] as number) + skip;
+  let done = traceOps(program, points, first, segments[segment + 1] as number, count);
+  if (segments[segment + 2] !== START.stack) {
+    done += traceAssembly(program, segment, points, layer, count);
+    return done;
+  }
+  const firstLayer = segments[segment + 3] as number;
+  const layers = segments[segment + 4] as number;
+  for (let i = 0; i < count; i++) layer[i] = layerAt(layerTopMm, firstLayer, layers, points.z[i] as number);
+  return done;
+}
+
+/** Sorts the points by the bar that their piece was cut from, traces each bar's share, and puts them back in order. */
+function traceAssembly(
+  program: Program,
+  segment: number,
+  points: Points,
+  layer: Uint16Array,
+  count: number,
+): number {
+  const { segments, pieces, params } = program;
+  const firstPiece = segments[segment + 3] as number;
+  const pieceCount = segments[segment + 4] as number;
+  const along = segments[segment + 2] === START.assemblyAlongThickness ? points.z : points.y;
+  const members = new Map<number, { readonly index: number[]; readonly piece: number[] }>();
+  for (let i = 0; i < count; i++) {
+    let piece = firstPiece;
+    const last = firstPiece + pieceCount - 1;
+    while (piece < last && (along[i] as number) >= borderOf(program, piece)) piece++;
+    const bar = pieces[piece * PIECE_WORDS] as number;
+    const share = members.get(bar) ?? { index: [], piece: [] };
+    members.set(bar, share);
+    share.index.push(i);
+    share.piece.push(piece);
+  }
+  let done = 0;
+  for (const [bar, { index, piece }] of members) {
+    const shared: Points = {
+      x: Float64Array.from(index, (i) => points.x[i] as number),
+      y: Float64Array.from(index, (i) => points.y[i] as number),
+      z: Float64Array.from(index, (i) => points.z[i] as number),
+    };
+    const sharedLayer = new Uint16Array(index.length);
+    for (let i = 0; i < index.length; i++) {
+      affineBack(shared, params, pieces[(piece[i] as number) * PIECE_WORDS + 1] as number, i, i + 1);
+    }
+    done += traceSegment(program, bar * SEGMENT_WORDS, shared, sharedLayer, index.length, 0);
+    index.forEach((to, i) => {
+      points.x[to] = shared.x[i] as number;
+      points.y[to] = shared.y[i] as number;
+      points.z[to] = shared.z[i] as number;
+      layer[to] = sharedLayer[i] as number;
+    });
+  }
+  return done;
+}
+
+function borderOf({ pieces, params }: Program, piece: number): number {
+  return params[(pieces[piece * PIECE_WORDS + 1] as number) + 9] as number;
+}
