@@ -67,20 +67,25 @@ export interface Warning {
  * @param format the reader's units; millimetres when absent
  */
 export function warningsOf(forging: Forging, format: Format = formatFor('mm')): readonly Warning[] {
-  const place = placesOf(forging);
-  const warnings = CHECKS.flatMap((check) =>
-    check.find(forging).map(({ severity, bar, stepId, values }): Warning => ({
-      code: check.code,
-      severity,
-      bar,
-      stepId,
-      ...check.words(values, severity, format),
-      values,
-      source: check.source,
+  const placeOf = placesOf(forging);
+  const placed = CHECKS.flatMap((check) =>
+    check.find(forging).map((finding) => ({
+      check,
+      finding,
+      rank: WARNING_SEVERITIES.indexOf(finding.severity),
+      place: placeOf(finding.bar, finding.stepId),
     })),
   );
-  const rank = (warning: Warning): number => WARNING_SEVERITIES.indexOf(warning.severity);
-  return warnings.sort((a, b) => rank(a) - rank(b) || place(a.bar, a.stepId) - place(b.bar, b.stepId));
+  placed.sort((a, b) => a.rank - b.rank || a.place - b.place);
+  return placed.map(({ check, finding: { severity, bar, stepId, values } }) => ({
+    code: check.code,
+    severity,
+    bar,
+    stepId,
+    ...check.words(values, severity, format),
+    values,
+    source: check.source,
+  }));
 }
 
 /** A warning told anew in other units; a code this program doesn't know is left as it is. */

@@ -2,7 +2,7 @@ import type { Bar } from '../design/index.js';
 import type { ForgedBar, Forging } from '../forging/index.js';
 import { type Steel, nominalPercent } from '../steels/index.js';
 import { isResizing, ratiosOf, stackBandsMm } from './band-thickness.js';
-import { isCarbonBarrier } from './carbon-activity.js';
+import { type CarbonPart, carbonAffinityOf, isCarbonBarrier, levelCarbonPercent } from './carbon-activity.js';
 import { carbonDiffusivityM2PerS } from './carbon-diffusion.js';
 import {
   type CarbonShift,
@@ -47,7 +47,7 @@ const AUSTENITE_FROM_C = 727;
  * heat to heat, and a heat acts on the thickness it starts with. Past a twist or an assembly d follows the bar's
  * later reduction (`thicknessRatio`). Carbon goes from where it was towards level activity by 1 − the layer-mean
  * residual of Fo; the mean is kept. `levelled` is the mean of that over stacks and assemblies, weighted by how far
- * carbon has to go in each; with nothing to level it is 1.
+ * carbon has to go in each. Where nothing can move it is 1 if carbon is level as laid, 0 if a barrier keeps it apart.
  *
  * Not counted: carbon lost at the skin, heats below 727 °C, what seeps through nickel.
  * **Source**: Ågren’s diffusivity at the bar's mean carbon; Fourier series of layers; carbon activity after Gunnarson.
@@ -76,11 +76,19 @@ export function carbonAfter(forging: Forging): CarbonAfter | null {
       ends.set(steel, sum);
     }
   }
-  return summary(
-    forging,
-    contents.get(forging.design.result) as BarContents,
-    ends,
-    toGo > 0 ? gone / toGo : 1,
+  const result = contents.get(forging.design.result) as BarContents;
+  return summary(forging, result, ends, toGo > 0 ? gone / toGo : isLevel(forging, result) ? 1 : 0);
+}
+
+/** Whether carbon is level in a bar as it was laid; where it is not and can't move, a barrier is in the way. */
+function isLevel(forging: Forging, contents: BarContents): boolean {
+  const parts = [...contents.massBySteel].flatMap(([index, mass]): CarbonPart[] => {
+    const steel = forging.steels[index] as Steel;
+    if (isCarbonBarrier(steel)) return [];
+    return [{ mass, carbonPercent: nominalPercent(steel, 'C'), affinity: carbonAffinityOf(steel) }];
+  });
+  return levelCarbonPercent(parts).every(
+    (level, i) => Math.abs(level - (parts[i] as CarbonPart).carbonPercent) < 1e-9,
   );
 }
 

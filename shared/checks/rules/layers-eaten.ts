@@ -4,6 +4,9 @@ import { allWorkedSteps } from '../walk.js';
 
 type Values = { scale: number; grinding: number; layers: number };
 
+/** More than this share of the layers gone in one step is more than a skin. Common practice, no source. */
+const MUCH = 0.1;
+
 /** Whole layers that a step burned or ground away. */
 export const layersEaten = check<Values>({
   code: 'layers-eaten',
@@ -14,7 +17,8 @@ export const layersEaten = check<Values>({
       const { scale, grinding } = after.eatenLayers;
       if (scale + grinding === 0) return [];
       const values = { scale, grinding, layers: after.bar.layers };
-      return [{ severity: 'caution', bar: bar.id, stepId: step.id, values }];
+      const severity = (scale + grinding) / after.bar.layers > MUCH ? 'caution' : 'note';
+      return [{ severity, bar: bar.id, stepId: step.id, values }];
     }),
   words: ({ scale, grinding, layers }, _severity, format) => {
     const all = scale + grinding;

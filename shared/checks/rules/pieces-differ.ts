@@ -54,18 +54,20 @@ export const piecesDiffer = check<Values>({
       ];
     }),
   words: (values, _severity, format) => {
-    const ways = [
-      values.lengthMm > NOTICED_MM && `${format.length(values.lengthMm)} in length`,
-      values.acrossMm > NOTICED_MM &&
-        `${format.length(values.acrossMm)} in ${values.along === 'thickness' ? 'width' : 'thickness'}`,
-    ].filter((way) => way !== false);
+    const across = values.along === 'thickness' ? 'width' : 'thickness';
+    const off = [
+      { mm: values.lengthMm, side: 'length' },
+      { mm: values.acrossMm, side: across },
+    ].filter(({ mm }) => mm > NOTICED_MM);
+    const ways = off.map(({ mm, side }) => `${format.length(mm)} in ${side}`);
+    const sides = off.map(({ side }) => side);
     const others =
       values.pieces > 1
         ? ` ${format.count(values.pieces)} of ${format.count(values.of)} pieces stick out; this one most.`
         : '';
     return {
       message: `Piece ${format.count(values.piece)} (“${values.pieceBar}”) sticks out by ${ways.join(' and ')}: ${format.percent(values.trimmedFraction)} of it is trimmed away.${others}`,
-      remedy: `Draw, grind or trim the bars to one length and ${values.along === 'thickness' ? 'width' : 'thickness'} before they are put together.`,
+      remedy: `Draw, grind or trim the bars to one ${sides.join(' and ')} before they are put together.`,
     };
   },
 });
