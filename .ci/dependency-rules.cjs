@@ -80,6 +80,8 @@ module.exports = {
       from: { path: '^server/' },
       to: { dependencyTypes: ['npm'], path: 'node_modules/', pathNot: installed(serverNever) },
     },
+    // Run from its sources, a worker thread has to be taught TypeScript first.
+    { from: { path: '^server/compute/worker-from-sources\\.mjs$' }, to: { path: installed('tsx/') } },
     {
       from: { path: `^server/.*(?:${spec})` },
       to: { path: ['^server/', `^shared/[^/]+${index}`, '^shared/[^/]+/testing/'] },
