@@ -51,6 +51,8 @@ export interface WeldEvent {
   readonly stepId: string | null;
   readonly method: WeldMethod;
   readonly temperatureC: number | null;
+  /** Whether the step sets its temperature itself; else it is the welding heat of the allowances. */
+  readonly isOwnTemperature: boolean;
   readonly steels: readonly Steel[];
 }
 
@@ -65,13 +67,16 @@ export function weldEvents(forging: Forging): readonly WeldEvent[] {
     const steels = steelsOfBar(forging, bar.id);
     const welds = workedSteps(bar).filter(({ step }) => isWeldingStep(step));
     if (welds.length === 0 && bar.cutInto === 0 && start.openSeams > 0) {
-      return [{ bar: bar.id, stepId: null, method: 'flux', temperatureC: null, steels }];
+      return [
+        { bar: bar.id, stepId: null, method: 'flux', temperatureC: null, isOwnTemperature: false, steels },
+      ];
     }
     return welds.map(({ step }) => ({
       bar: bar.id,
       stepId: step.id,
       method: weldMethodOf(step),
       temperatureC: heatTemperatureC(step, forging.allowances),
+      isOwnTemperature: step.temperatureC !== undefined,
       steels,
     }));
   });

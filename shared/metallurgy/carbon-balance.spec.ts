@@ -2,7 +2,7 @@ import * as fc from 'fast-check';
 import type { Bar, Design, Layer, Piece } from '../design/index.js';
 import { evaluate } from '../forging/index.js';
 import { LOSSLESS, type StepPlan, barFrom, billet, designOf, stackOf } from '../forging/testing/designs.js';
-import { type Composition, type Steel, findSteel } from '../steels/index.js';
+import { type Steel, findSteel } from '../steels/index.js';
 import { type CarbonAfter, carbonAfter, contentsOf, sharesOfResult } from './index.js';
 import activity from './reference/carbon-activity.json';
 

@@ -1,3 +1,4 @@
+import type { Format } from '../../units/index.js';
 import { type Finding, check } from '../check.js';
 import { counted } from '../say.js';
 import { allWorkedSteps } from '../walk.js';
@@ -53,10 +54,13 @@ export const reductionTooLarge = check<Values>({
   words: (values, _severity, format) => ({
     message:
       `From ${format.length(values.fromMm)} to ${format.length(values.toMm)} is ${format.percent(values.reduction)} of the ${values.side}; ` +
-      (values.hasHeats === 'yes'
-        ? `${counted(values.heats, 'heat', 'heats', format)} at ${format.percent(values.perHeat)} each allow ${format.percent(values.allowed)}. `
-        : `the step gives no heats, and one allows ${format.percent(values.allowed)}. `) +
+      `${allowance(values, format)} allow${values.heats === 1 ? 's' : ''} ${format.percent(values.allowed)}. ` +
       'Pressed further, the bar is forged too cold and seams shear.',
     remedy: `Plan at least ${counted(values.heatsNeeded, 'heat', 'heats', format)} for this step.`,
   }),
 });
+
+function allowance({ heats, hasHeats, perHeat }: Values, format: Format): string {
+  if (hasHeats === 'no') return 'the step gives no heats, and one';
+  return heats === 1 ? 'one heat' : `${format.count(heats)} heats at ${format.percent(perHeat)} each`;
+}

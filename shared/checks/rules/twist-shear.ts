@@ -52,8 +52,10 @@ export const twistShear = check<Values>({
     }),
   words: (values, _severity, format) => ({
     message:
-      `${format.number(values.turns)} turns on ${format.length(values.lengthMm)} of a ${format.length(values.diameterMm)} bar shear its skin by ${format.number(values.shear)}, ` +
-      `${format.number(values.shearPerHeat)} in each of ${counted(values.heats, 'heat', 'heats', format)}; ` +
+      `${format.number(values.turns)} turns on ${format.length(values.lengthMm)} of a ${format.length(values.diameterMm)} bar shear its skin by ${format.number(values.shear)} ` +
+      (values.heats === 1
+        ? 'in one heat; '
+        : `in ${format.count(values.heats)} heats, ${format.number(values.shearPerHeat)} in each; `) +
       (values.tender === ''
         ? `past ${format.number(values.limit)} in one heat outer seams tear.`
         : `with ${values.tender} in it seams tear past ${format.number(values.limit)} in one heat.`),

@@ -1,8 +1,7 @@
-import { weldingWindow } from '../../metallurgy/index.js';
+import { type WeldMethod, weldingWindow } from '../../metallurgy/index.js';
 import { type Finding, check } from '../check.js';
 import { METHOD_WORDS, aboutTemperature } from '../say.js';
-import { weldEvents } from '../walk.js';
-import type { WeldMethod } from '../../metallurgy/index.js';
+import { type WeldEvent, firstOfEach, weldEvents } from '../walk.js';
 
 type Values = {
   temperatureC: number;
@@ -13,19 +12,22 @@ type Values = {
   steel: string;
   steelName: string;
   method: WeldMethod;
+  /** Set at the step, or the welding heat of the allowances. */
+  isOwn: 'yes' | 'no';
 };
 
 /** A range narrower than this is no plan at all, which its own warning says. */
 const NO_PLAN_K = 30;
 
-/** A welding heat outside the welding range of the steels in the bar. */
+/** A welding heat outside the welding range of the steels in the bar; one that the allowances set is told once for each bar. */
 export const weldHeat = check<Values>({
   code: 'weld-heat',
   source:
     'Common practice, no source: weld between 1100 °C (flux), 1050 °C (dry), 1000 °C (sealed) and 100–150 °C below the ' +
     'lowest solidus; at the solidus a steel burns. Solidus: line of the iron–carbon diagram, alloy slopes from memory: source to be confirmed',
   find: (forging) =>
-    weldEvents(forging).flatMap(({ bar, stepId, method, temperatureC, steels }): Finding<Values>[] => {
+    eachHeat(weldEvents(forging)).flatMap((event): Finding<Values>[] => {
+      const { bar, stepId, method, temperatureC, steels } = event;
       const window = weldingWindow(steels, method);
       if (temperatureC === null || window === null || window.aimC === null || window.widthK < NO_PLAN_K)
         return [];
@@ -37,13 +39,27 @@ export const weldHeat = check<Values>({
           severity: temperatureC >= solidusC ? 'stop' : 'caution',
           bar,
           stepId,
-          values: { temperatureC, ceilingC, floorC, solidusC, aimC, steel: limitedBy, steelName, method },
+          values: {
+            temperatureC,
+            ceilingC,
+            floorC,
+            solidusC,
+            aimC,
+            steel: limitedBy,
+            steelName,
+            method,
+            isOwn: event.isOwnTemperature ? 'yes' : 'no',
+          },
         },
       ];
     }),
   words: (values, severity, format) => {
     const heat = format.temperature(values.temperatureC);
-    const remedy = `Set this weld to about ${aboutTemperature(values.aimC, format)}.`;
+    const aim = aboutTemperature(values.aimC, format);
+    const remedy =
+      values.isOwn === 'yes'
+        ? `Set this weld to about ${aim}.`
+        : `Set the welding heat to about ${aim}, at the welds of this bar or in the allowances.`;
     if (values.temperatureC < values.floorC) {
       return {
         message: `A welding heat of ${heat} is too cool: a weld ${METHOD_WORDS[values.method]} takes at least ${aboutTemperature(values.floorC, format)}. The seams may not take.`,
@@ -57,3 +73,9 @@ export const weldHeat = check<Values>({
     return { message: `A welding heat of ${heat} is too hot: ${over}`, remedy };
   },
 });
+
+function eachHeat(events: readonly WeldEvent[]): readonly WeldEvent[] {
+  return firstOfEach(events, ({ bar, stepId, method, isOwnTemperature }) =>
+    JSON.stringify(isOwnTemperature ? [bar, stepId] : [bar, null, method]),
+  );
+}
