@@ -4,6 +4,8 @@ import type { Logger } from 'pino';
 import { addAuthRoutes } from './auth/auth-routes.js';
 import type { AuthService } from './auth/auth-service.js';
 import type { SignIn } from './auth/sign-in.js';
+import { addCardRoutes } from './cards/card-routes.js';
+import type { CardService } from './cards/card-service.js';
 import type { Compute } from './compute/tasks.js';
 import { addDesignRoutes } from './designs/design-routes.js';
 import type { DesignRepository } from './designs/design-repository.js';
@@ -31,6 +33,7 @@ export interface AppParts {
   readonly crossSite: CrossSiteGuard;
   readonly designRows: DesignRepository;
   readonly designs: DesignService;
+  readonly cards: CardService;
   readonly compute: Compute;
   readonly limits: RateLimitConfig;
   /** People reach the site by HTTPS. */
@@ -72,6 +75,7 @@ export function createApp(parts: AppParts): App {
   addHealthRoutes(routes, parts.health);
   addAuthRoutes(routes, { ...parts, service: parts.auth });
   addDesignRoutes(routes, parts.designs);
+  addCardRoutes(routes, parts.cards);
   addEvaluateRoutes(routes, parts.compute, parts.limits);
   addSteelRoutes(routes);
   addDocsRoutes(routes);

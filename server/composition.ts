@@ -7,6 +7,7 @@ import { AuthService } from './auth/auth-service.js';
 import { Passwords } from './auth/passwords.js';
 import { SessionStore } from './auth/session-store.js';
 import { SignIn } from './auth/sign-in.js';
+import { CardService } from './cards/card-service.js';
 import type { Compute } from './compute/tasks.js';
 import type { Units } from './db/units.js';
 import { seedDemo } from './demo/seed-demo.js';
@@ -32,6 +33,7 @@ export interface Materials {
 }
 
 export interface Composition extends App {
+  readonly auth: AuthService;
   readonly health: Health;
   readonly housekeeping: Housekeeping;
   /** Fills an empty database with an invented shop. */
@@ -59,6 +61,7 @@ export function compose(materials: Materials): Composition {
     crossSite: crossSiteGuard({ secret, isSecure, publicOrigin }),
     designRows,
     designs,
+    cards: new CardService({ designs, compute, publicOrigin, now }),
     compute,
     limits: materials.limits,
     isSecure,
@@ -67,6 +70,7 @@ export function compose(materials: Materials): Composition {
   });
   return {
     ...app,
+    auth,
     health,
     housekeeping: new Housekeeping({ store, designs: designRows, log, now }),
     seed: () => seedDemo({ accounts, passwords, designs, now, newId: randomUUID }),

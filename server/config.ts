@@ -38,15 +38,18 @@ type Environment = Readonly<Record<string, string | undefined>>;
 /** Reads the settings; an empty value counts as none. Throws {@link ConfigError} naming the first that is wrong. */
 export function configFrom(environment: Environment): Config {
   const given = (name: string): string | null => environment[name]?.trim() || null;
+  const publicOrigin = originOf(given('PUBLIC_URL'));
+  // Nothing but a proxy can give people HTTPS here.
+  const proxies = publicOrigin?.startsWith('https:') ? 1 : 0;
   return {
     port: wholeNumber('PORT', given('PORT'), 4210, 65_535),
     host: hostOf(given('HOST')),
     dataFolder: resolve(given('DATA_DIR') ?? 'data'),
-    publicOrigin: originOf(given('PUBLIC_URL')),
+    publicOrigin,
     sessionSecret: secretOf(given('SESSION_SECRET')),
     hasDemo: flag('SEED_DEMO', given('SEED_DEMO'), true),
     logLevel: logLevelOf(given('LOG_LEVEL')),
-    trustedProxies: wholeNumber('TRUST_PROXY', given('TRUST_PROXY'), 0, 10),
+    trustedProxies: wholeNumber('TRUST_PROXY', given('TRUST_PROXY'), proxies, 10),
     limits: DEFAULT_RATE_LIMITS,
     webFolder: builtPage(),
   };

@@ -30,6 +30,8 @@ export const POLICY: Readonly<Record<string, Rule>> = {
   'PUT /api/designs/:id': 'designOwner',
   'DELETE /api/designs/:id': 'designOwner',
   'POST /api/designs/:id/restore': 'designOwner',
+  'GET /api/designs/:id/card.pdf': 'designOwner',
+  'GET /api/designs/:id/cut-sheet.pdf': 'designOwner',
 };
 
 /** The rule of a route. Throws for one that nobody has thought about, so that the program does not start with it. */

@@ -1,3 +1,4 @@
+import type { Request } from 'express';
 import { z } from 'zod';
 import { PAPERS, type Paper } from '../pdf/sheet.js';
 import type { ProblemCode } from '../http/problem.js';
@@ -32,7 +33,7 @@ export function addCardRoutes(routes: Routes, service: CardService): void {
       problems: PROBLEMS,
     },
     handle: async ({ params, query, request }) =>
-      pdf(await service.forgeCard(sheetRequest(params, query, request.acceptsLanguages())), 'forge-card'),
+      pdf(await service.forgeCard(sheetRequest(params, query, request)), 'forge-card'),
   });
 
   routes.add({
@@ -50,19 +51,25 @@ export function addCardRoutes(routes: Routes, service: CardService): void {
       problems: PROBLEMS,
     },
     handle: async ({ params, query, request }) =>
-      pdf(await service.cutSheet(sheetRequest(params, query, request.acceptsLanguages())), 'cut-sheet'),
+      pdf(await service.cutSheet(sheetRequest(params, query, request)), 'cut-sheet'),
   });
 }
 
 function sheetRequest(
   params: Readonly<Record<string, string>>,
   query: z.infer<typeof querySchema>,
-  languages: readonly string[],
+  request: Request,
 ): SheetRequest {
-  return { designId: params['id'] ?? '', paper: query.paper, units: query.units, languages };
+  return {
+    designId: params['id'] ?? '',
+    paper: query.paper,
+    units: query.units,
+    languages: request.acceptsLanguages(),
+    reachedAt: `${request.protocol}://${request.get('host') ?? 'localhost'}`,
+  };
 }
 
-function pdf(sheet: { readonly bytes: Buffer; readonly revision: number }, name: string): Answer {
+function pdf(sheet: { readonly bytes: Uint8Array; readonly revision: number }, name: string): Answer {
   return {
     status: 200,
     bytes: sheet.bytes,

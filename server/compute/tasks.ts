@@ -1,6 +1,7 @@
 import { type Evaluation, assess } from '../../shared/checks/index.js';
 import type { Design } from '../../shared/design/index.js';
 import { type Forging, evaluate } from '../../shared/forging/index.js';
+import { type SheetOrder, printCutSheet, printForgeCard } from '../cards/print.js';
 
 /** Why a design has no result: the step (or the start of a bar) that cannot be done. */
 export interface RefusedStep {
@@ -43,11 +44,15 @@ export const TASKS = {
       endMassKg: totals?.endMassKg ?? null,
     };
   },
+
+  forgeCard: (order: SheetOrder): Promise<Uint8Array> => printForgeCard(order),
+
+  cutSheet: (order: SheetOrder): Promise<Uint8Array> => printCutSheet(order),
 } as const;
 
 export type TaskName = keyof typeof TASKS;
 export type TaskInput<N extends TaskName> = Parameters<(typeof TASKS)[N]>[0];
-export type TaskOutput<N extends TaskName> = ReturnType<(typeof TASKS)[N]>;
+export type TaskOutput<N extends TaskName> = Awaited<ReturnType<(typeof TASKS)[N]>>;
 
 /** Where tasks are done. */
 export interface Compute {

@@ -16,13 +16,13 @@ const port = parentPort;
 if (!port) throw new Error('This is the code of a worker thread.');
 
 port.on('message', ({ name, input }: TaskMessage) => {
-  port.postMessage(replyTo(TASKS[name] as (input: unknown) => unknown, input));
+  void replyTo(TASKS[name] as (input: unknown) => unknown, input).then((reply) => port.postMessage(reply));
 });
 port.postMessage({ kind: 'ready' } satisfies TaskReply);
 
-function replyTo(task: (input: unknown) => unknown, input: unknown): TaskReply {
+async function replyTo(task: (input: unknown) => unknown, input: unknown): Promise<TaskReply> {
   try {
-    return { kind: 'done', output: task(input) };
+    return { kind: 'done', output: await task(input) };
   } catch (error) {
     const { message, stack } = error instanceof Error ? error : new Error(String(error));
     return { kind: 'failed', message, stack };

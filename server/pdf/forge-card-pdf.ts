@@ -1,5 +1,5 @@
-import QRCode from 'qrcode';
 import type { CardBar, CardStep, CardTarget, ForgeCard } from '../../shared/card/index.js';
+import { codeModules } from './code-modules.js';
 import { type Paper, Sheet } from './sheet.js';
 
 /** What goes on a sheet beside its content. */
@@ -41,11 +41,7 @@ function heading(sheet: Sheet, card: ForgeCard, context: SheetContext): void {
 }
 
 function codeBlock(sheet: Sheet, link: string, x: number, y: number): void {
-  const { modules } = QRCode.create(link, { errorCorrectionLevel: 'Q' });
-  const rows = Array.from({ length: modules.size }, (_, r) =>
-    Array.from({ length: modules.size }, (__, c) => modules.get(r, c) === 1),
-  );
-  sheet.code(rows, x, y, CODE_PT);
+  sheet.code(codeModules(link), x, y, CODE_PT);
 }
 
 /** Facts in four columns; sizes, which are long, take two. */
