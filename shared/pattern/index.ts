@@ -1,3 +1,5 @@
+export { MOST_KERNEL_FOLDS, layerThicknessMm, tracerFor } from './engine.js';
+export { type Kernel, type Precision, kernelOf, kernelTracer } from './kernel/kernel.js';
 export { type Moment, compile } from './program/compile.js';
 export { type Program, entryOps } from './program/program.js';
 export { referenceTracer } from './reference/tracer.js';

@@ -6,8 +6,6 @@ export type Engine = 'kernel-f32' | 'kernel-f64' | 'reference';
 /**
  * Takes batches of points back to the stacks they come from. Write coordinates into `x`, `y` and `z`, run, read `layer`;
  * afterwards the coordinates are those in the stack, mm: `x` along, `y` across, `z` from its bottom.
- *
- * The arrays may be replaced by a run: take them from the tracer anew each time.
  */
 export interface Tracer {
   readonly program: Program;

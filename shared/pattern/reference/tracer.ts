@@ -83,42 +83,61 @@ function traceAssembly(
   count: number,
 ): number {
   const { segments, pieces, params } = program;
+  const piece = piecesOf(program, segment, points, count);
   const firstPiece = segments[segment + 3] as number;
-  const pieceCount = segments[segment + 4] as number;
-  const along = segments[segment + 2] === START.assemblyAlongThickness ? points.z : points.y;
-  const members = new Map<number, { readonly index: number[]; readonly piece: number[] }>();
-  for (let i = 0; i < count; i++) {
-    let piece = firstPiece;
-    const last = firstPiece + pieceCount - 1;
-    while (piece < last && (along[i] as number) >= borderOf(program, piece)) piece++;
-    const bar = pieces[piece * PIECE_WORDS] as number;
-    const share = members.get(bar) ?? { index: [], piece: [] };
-    members.set(bar, share);
-    share.index.push(i);
-    share.piece.push(piece);
+  const bars = new Set<number>();
+  for (let p = firstPiece; p < firstPiece + (segments[segment + 4] as number); p++) {
+    bars.add(pieces[p * PIECE_WORDS] as number);
   }
   let done = 0;
-  for (const [bar, { index, piece }] of members) {
-    const shared: Points = {
-      x: Float64Array.from(index, (i) => points.x[i] as number),
-      y: Float64Array.from(index, (i) => points.y[i] as number),
-      z: Float64Array.from(index, (i) => points.z[i] as number),
-    };
-    const sharedLayer = new Uint16Array(index.length);
-    for (let i = 0; i < index.length; i++) {
-      affineBack(shared, params, pieces[(piece[i] as number) * PIECE_WORDS + 1] as number, i, i + 1);
+  for (const bar of bars) {
+    const places = new Int32Array(count);
+    let share = 0;
+    for (let i = 0; i < count; i++) {
+      if (pieces[(piece[i] as number) * PIECE_WORDS] === bar) places[share++] = i;
     }
-    done += traceSegment(program, bar * SEGMENT_WORDS, shared, sharedLayer, index.length, 0);
-    index.forEach((to, i) => {
+    if (share === 0) continue;
+    const shared: Points = {
+      x: new Float64Array(share),
+      y: new Float64Array(share),
+      z: new Float64Array(share),
+    };
+    for (let i = 0; i < share; i++) {
+      const from = places[i] as number;
+      shared.x[i] = points.x[from] as number;
+      shared.y[i] = points.y[from] as number;
+      shared.z[i] = points.z[from] as number;
+      affineBack(shared, params, pieces[(piece[from] as number) * PIECE_WORDS + 1] as number, i, i + 1);
+    }
+    const sharedLayer = new Uint16Array(share);
+    done += traceSegment(program, bar * SEGMENT_WORDS, shared, sharedLayer, share, 0);
+    for (let i = 0; i < share; i++) {
+      const to = places[i] as number;
       points.x[to] = shared.x[i] as number;
       points.y[to] = shared.y[i] as number;
       points.z[to] = shared.z[i] as number;
       layer[to] = sharedLayer[i] as number;
-    });
+    }
   }
   return done;
 }
 
-function borderOf({ pieces, params }: Program, piece: number): number {
-  return params[(pieces[piece * PIECE_WORDS + 1] as number) + 9] as number;
+/** The piece that each point of an assembly lies in, an index into the program's pieces. A border belongs to the next one. */
+function piecesOf(
+  { segments, pieces, params }: Program,
+  segment: number,
+  points: Points,
+  count: number,
+): Uint16Array {
+  const first = segments[segment + 3] as number;
+  const last = first + (segments[segment + 4] as number) - 1;
+  const along = segments[segment + 2] === START.assemblyAlongThickness ? points.z : points.y;
+  const piece = new Uint16Array(count);
+  for (let i = 0; i < count; i++) {
+    const at = along[i] as number;
+    let p = first;
+    while (p < last && at >= (params[(pieces[p * PIECE_WORDS + 1] as number) + 9] as number)) p++;
+    piece[i] = p;
+  }
+  return piece;
 }
