@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import type { Steel } from '../steels/index.js';
 import { ALLOWANCE_DEFAULTS, type Allowances, type Step, stepSchema } from '../steps/index.js';
+import { type Blank, blankSchema } from './blank.js';
 import { LIMIT_DEFAULTS, type ShopLimits } from './limits.js';
 import { steelSchema } from './steel-schema.js';
 
@@ -51,13 +52,6 @@ export interface Bar {
   readonly name: string;
   readonly start: Stack | Assembly;
   readonly steps: readonly Step[];
-}
-
-/** The finished piece the billet is for; it must fit into the end of the result bar. */
-export interface Blank {
-  readonly lengthMm: number;
-  readonly widthMm: number;
-  readonly thicknessMm: number;
 }
 
 /** The design document, version 1. Lengths mm, masses kg, temperatures °C, times minutes. */
@@ -112,12 +106,6 @@ const barSchema = z.strictObject({
   name: z.string().min(1).max(120),
   start: z.discriminatedUnion('kind', [stackSchema, assemblySchema]),
   steps: z.array(stepSchema).max(MAX_STEPS),
-});
-
-const blankSchema = z.strictObject({
-  lengthMm: sizeMm(2_000),
-  widthMm: sizeMm(500),
-  thicknessMm: sizeMm(200),
 });
 
 /** Optional numbers within the limits that a table of defaults gives. */

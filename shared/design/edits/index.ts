@@ -1,4 +1,5 @@
-import type { Blank, Design } from '../schema.js';
+import type { Blank } from '../blank.js';
+import type { Design } from '../schema.js';
 
 export * from './bars.js';
 export * from './layers.js';
