@@ -13,7 +13,7 @@ import { atLeast, emailLike, errorWords, filledIn, focusFirstInvalid, showIssues
 import { PasswordField } from './password-field';
 
 /** As the server asks for. */
-const PASSWORD_LENGTH = 10;
+const PASSWORD_LENGTH = 8;
 
 @Component({
   selector: 'lw-sign-up-page',

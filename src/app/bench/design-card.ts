@@ -1,4 +1,13 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  type ElementRef,
+  inject,
+  input,
+  output,
+  viewChild,
+} from '@angular/core';
 import { MatIconButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
 import { MatTooltip } from '@angular/material/tooltip';
@@ -21,6 +30,13 @@ export class DesignCard {
   readonly copied = output();
   readonly deleted = output();
 
+  private readonly link = viewChild.required<ElementRef<HTMLElement>>('link');
+
+  protected readonly marks = computed(() => {
+    const { revision, summary } = this.design();
+    const bars = summary.bars > 1 ? `${this.units.format().count(summary.bars)} bars · ` : '';
+    return `${bars}rev. ${revision}`;
+  });
   protected readonly figures = computed(() => {
     const format = this.units.format();
     const { layers, startMassKg, endMassKg } = this.design().summary;
@@ -30,4 +46,9 @@ export class DesignCard {
       { name: 'Mass out', value: endMassKg === null ? '–' : format.mass(endMassKg) },
     ];
   });
+
+  /** Brings the keyboard to the link that opens the design. */
+  focus(): void {
+    this.link().nativeElement.focus();
+  }
 }

@@ -1,4 +1,15 @@
-import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import {
+  afterNextRender,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  type ElementRef,
+  inject,
+  Injector,
+  signal,
+  viewChild,
+  viewChildren,
+} from '@angular/core';
 import { MatButton, MatIconButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
 import { MatFormField, MatLabel, MatPrefix, MatSuffix } from '@angular/material/form-field';
@@ -43,12 +54,16 @@ import { StarterGallery } from './starter-gallery';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class DesignList {
+  private readonly injector = inject(Injector);
   private readonly router = inject(Router);
   private readonly dialog = inject(MatDialog);
   private readonly snackBar = inject(MatSnackBar);
   private readonly adoption = inject(AdoptDrafts);
   protected readonly store = inject(BenchStore);
   protected readonly visitor = inject(VisitorDrafts);
+
+  private readonly cards = viewChildren(DesignCard);
+  private readonly title = viewChild.required<ElementRef<HTMLElement>>('title');
 
   protected readonly isStarting = signal(false);
   protected readonly failure = computed(() => {
@@ -98,7 +113,10 @@ export class DesignList {
   }
 
   protected delete(item: DesignListItem): void {
-    this.store.delete(item).subscribe({
+    const place = this.store.shown().indexOf(item);
+    const deleting = this.store.delete(item);
+    this.focusNear(place);
+    deleting.subscribe({
       next: () => {
         this.snackBar
           .open(`Deleted “${item.name}”`, 'Undo', { duration: 10_000 })
@@ -117,6 +135,19 @@ export class DesignList {
       left === 0 ? `${saved} saved to the bench` : `${saved} saved, ${left} not taken: try again later`,
       undefined,
       { duration: 8_000 },
+    );
+  }
+
+  /** What had the keyboard's focus is gone: it goes to the design that took its place. */
+  private focusNear(place: number): void {
+    afterNextRender(
+      () => {
+        const cards = this.cards();
+        const near = cards[Math.min(place, cards.length - 1)];
+        if (near) near.focus();
+        else this.title().nativeElement.focus();
+      },
+      { injector: this.injector },
     );
   }
 

@@ -25,6 +25,9 @@ import { StarterGallery } from './starter-gallery';
     </mat-dialog-actions>
   `,
   styles: `
+    mat-dialog-content {
+      max-height: 78dvh;
+    }
     p {
       padding-bottom: 16px;
     }

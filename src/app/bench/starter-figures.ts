@@ -1,6 +1,7 @@
 import { type Stack, STARTERS, type Starter } from '@shared/design';
 import { evaluate, type Forging } from '@shared/forging';
 import { findSteel, toneOf } from '@shared/steels';
+import { kindOf } from '@shared/steps';
 
 /** A starter with what comes of it. */
 export interface ForgedStarter {
@@ -58,4 +59,16 @@ function drawnStack(stack: Stack): Pick<DrawnStack, 'widthMm' | 'heightMm' | 'la
 export function fillOf(steelId: string): string {
   const steel = findSteel(steelId);
   return steel ? toneOf(steel).hex : 'none';
+}
+
+/** What is done to the bar that becomes the billet: "Forge weld → Draw out → Trim the ends". */
+export function stepsOf({ design }: Forging): string {
+  const bar = design.bars.find(({ id }) => id === design.result);
+  if (bar === undefined) return '';
+  const { start, steps } = bar;
+  const laid =
+    start.kind === 'assembly'
+      ? [`${start.pieces.length} pieces ${start.along === 'width' ? 'side by side' : 'on each other'}`]
+      : [];
+  return [...laid, ...steps.map((step) => kindOf(step).words.name)].join(' → ');
 }

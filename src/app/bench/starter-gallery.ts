@@ -3,7 +3,7 @@ import { MatButton } from '@angular/material/button';
 import type { Starter } from '@shared/design';
 import { UnitsStore } from '../core/units/units-store';
 import { StackEnds } from './stack-ends';
-import { forgedStarters } from './starter-figures';
+import { forgedStarters, stepsOf } from './starter-figures';
 
 /** The ready designs, each with its stacks to scale, a sentence and what comes of it. */
 @Component({
@@ -24,6 +24,7 @@ export class StarterGallery {
     return forgedStarters().map(({ starter, forging }) => ({
       starter,
       forging,
+      steps: stepsOf(forging),
       figures: [
         { name: 'Layers', value: format.count(forging.result?.bar.layers ?? 0) },
         { name: 'Welds', value: format.count(forging.totals?.welds ?? 0) },

@@ -21,7 +21,7 @@ export const DRAFT_SHELVES = new InjectionToken<() => Promise<DraftShelf>>('draf
 });
 
 /** The browser's own database. Copying keeps what the entries of a history share, so depth costs only what was changed. */
-export async function databaseShelf(name: string): Promise<DraftShelf> {
+export async function databaseShelf(name: string): Promise<DraftShelf & { close(): void }> {
   const database = await openDB<DraftDatabase>(name, 1, {
     upgrade: (db) => {
       db.createObjectStore('drafts', { keyPath: 'key' });
@@ -35,6 +35,7 @@ export async function databaseShelf(name: string): Promise<DraftShelf> {
       await Promise.all([transaction.store.put(draft), transaction.done]);
     },
     remove: (key) => database.delete('drafts', key),
+    close: () => database.close(),
   };
 }
 

@@ -9,6 +9,8 @@ const CHOICES: readonly { readonly appearance: Appearance; readonly words: strin
     { appearance: 'dark', words: 'Soot (dark)', icon: 'dark' },
   ];
 
+let instances = 0;
+
 /** Light, dark, or what the reader's system says. */
 @Component({
   selector: 'lw-appearance-switch',
@@ -20,7 +22,7 @@ const CHOICES: readonly { readonly appearance: Appearance; readonly words: strin
         <label>
           <input
             type="radio"
-            name="appearance"
+            [name]="group"
             [checked]="store.appearance() === choice.appearance"
             (change)="store.choose(choice.appearance)"
           />
@@ -36,4 +38,6 @@ const CHOICES: readonly { readonly appearance: Appearance; readonly words: strin
 export class AppearanceSwitch {
   protected readonly store = inject(AppearanceStore);
   protected readonly choices = CHOICES;
+  /** The switch may be on a page twice. */
+  protected readonly group = `lw-appearance-${instances++}`;
 }

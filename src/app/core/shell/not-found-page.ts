@@ -9,6 +9,11 @@ import { RouterLink } from '@angular/router';
     <p>This address leads nowhere. The page was moved, or the address is mistyped.</p>
     <p><a routerLink="/">Go to the bench</a></p>
   `,
+  styles: `
+    p {
+      padding-top: 12px;
+    }
+  `,
   host: { class: 'lw-page' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })

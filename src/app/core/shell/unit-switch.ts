@@ -7,6 +7,8 @@ const CHOICES: readonly { readonly system: UnitSystem; readonly short: string; r
   { system: 'inch', short: 'in', words: 'Inches, pounds, °F' },
 ];
 
+let instances = 0;
+
 /** Millimetres or inches, for every figure on the screen at once. */
 @Component({
   selector: 'lw-unit-switch',
@@ -17,7 +19,7 @@ const CHOICES: readonly { readonly system: UnitSystem; readonly short: string; r
         <label [title]="choice.words">
           <input
             type="radio"
-            name="units"
+            [name]="group"
             [checked]="units.system() === choice.system"
             (change)="units.choose(choice.system)"
           />
@@ -33,4 +35,6 @@ const CHOICES: readonly { readonly system: UnitSystem; readonly short: string; r
 export class UnitSwitch {
   protected readonly units = inject(UnitsStore);
   protected readonly choices = CHOICES;
+  /** The switch may be on a page twice. */
+  protected readonly group = `lw-units-${instances++}`;
 }
