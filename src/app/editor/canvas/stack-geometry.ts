@@ -76,7 +76,7 @@ export type StackHit =
 export interface Reach {
   /** Layers thinner than this borrow height to be picked, px. */
   readonly minPickPx: number;
-  /** So far from an edge it can still be taken, px; less where the layers beside it are thin. */
+  /** So far from an edge it can still be taken, px; less where the layers beside it are low. */
   readonly edgePx: number;
   /** Half the side of the grip, px. */
   readonly gripPx: number;
@@ -118,7 +118,7 @@ export function hitStack(
   if (acrossMm < 0 || acrossMm > geometry.widthMm) return { kind: 'empty' };
   const limits = pickLimitsPx(geometry, viewport.pxPerMm, reach.minPickPx);
   const upPx = upMm * viewport.pxPerMm;
-  const edge = edgeNear(geometry, viewport.pxPerMm, limits, upPx, reach.edgePx);
+  const edge = edgeNear(geometry, viewport.pxPerMm, upPx, reach);
   if (edge !== null) return { kind: 'edge', place: edge };
   if (upPx < (limits[0] as number) || upPx > (limits[geometry.count] as number)) return { kind: 'empty' };
   return { kind: 'layer', place: Math.min(geometry.count - 1, lastAtOrBelow(limits, upPx)) };
@@ -136,25 +136,19 @@ export function layersBetween(geometry: StackGeometry, aMm: number, bMm: number)
   return places;
 }
 
-/** The layer whose upper edge is near; a third of a thin layer is left to pick it by. */
-function edgeNear(
-  geometry: StackGeometry,
-  pxPerMm: number,
-  limits: Float64Array,
-  upPx: number,
-  edgePx: number,
-): number | null {
-  const under = lastAtOrBelow(limits, upPx);
+/** The layer whose upper edge is near. Beside a layer too thin to be hit there is only the picking of it, and its grip. */
+function edgeNear(geometry: StackGeometry, pxPerMm: number, upPx: number, reach: Reach): number | null {
+  const isThin = (place: number): boolean => thicknessOf(geometry, place) * pxPerMm < reach.minPickPx;
+  const under = lastAtOrBelow(geometry.seamsMm, upPx / pxPerMm);
   for (const seam of [under, under + 1]) {
-    if (seam < 1 || seam > geometry.count) continue;
+    if (seam < 1 || seam > geometry.count || isThin(seam - 1)) continue;
+    const isTop = seam === geometry.count;
+    if (!isTop && isThin(seam)) continue;
     const offPx = upPx - seamMm(geometry, seam) * pxPerMm;
-    const besidePx =
-      offPx < 0 || seam === geometry.count
-        ? thicknessOf(geometry, seam - 1) * pxPerMm
-        : thicknessOf(geometry, seam) * pxPerMm;
+    const beside = offPx < 0 || isTop ? seam - 1 : seam;
     // Above the stack there is nothing to be picked instead.
-    const roomPx = seam === geometry.count && offPx >= 0 ? edgePx : besidePx / 4;
-    if (Math.abs(offPx) <= Math.min(edgePx, roomPx)) return seam - 1;
+    const roomPx = isTop && offPx >= 0 ? reach.edgePx : (thicknessOf(geometry, beside) * pxPerMm) / 4;
+    if (Math.abs(offPx) <= Math.min(reach.edgePx, roomPx)) return seam - 1;
   }
   return null;
 }
