@@ -4,3 +4,15 @@ export { type Moment, compile } from './program/compile.js';
 export { type Program, entryOps } from './program/program.js';
 export { referenceTracer } from './reference/tracer.js';
 export type { Engine, Tracer } from './tracer.js';
+export { edgeSteels, type EdgeShare } from './surfaces/edge.js';
+export { outlinePoints } from './surfaces/outline.js';
+export {
+  FACES,
+  type Face,
+  type Surface,
+  type SurfaceMap,
+  type SurfacePoints,
+  WHOLE,
+  type Window,
+} from './surfaces/surface.js';
+export { type PixelPoints, surfaceMap, surfacePoints } from './surfaces/surface-map.js';
