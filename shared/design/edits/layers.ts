@@ -127,7 +127,11 @@ export function setStackSize(
   barId: string,
   size: { lengthMm?: number; widthMm?: number },
 ): Design {
-  return withStack(design, barId, (stack) => ({ ...stack, ...size }));
+  return withStack(design, barId, (stack) => {
+    const { lengthMm = stack.lengthMm, widthMm = stack.widthMm } = size;
+    const isSame = lengthMm === stack.lengthMm && widthMm === stack.widthMm;
+    return isSame ? stack : { ...stack, lengthMm, widthMm };
+  });
 }
 
 /** Replaces a stack's layers. */
