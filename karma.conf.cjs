@@ -26,6 +26,9 @@ module.exports = (config) =>
         ],
       },
     },
-    browserNoActivityTimeout: 180_000,
+    // A property spec may keep the page's thread busy for longer than the usual five seconds.
+    pingTimeout: 120_000,
+    browserDisconnectTimeout: 60_000,
+    browserNoActivityTimeout: 300_000,
     restartOnFileChange: false,
   });

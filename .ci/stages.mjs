@@ -32,9 +32,12 @@ const jasmine = (name, folder, tsConfig, after) => ({
   specs: true,
   after,
   run: () =>
-    node(['--import', 'tsx', tool('jasmine'), `--config=${folder}/jasmine.json`], {
-      env: { TSX_TSCONFIG_PATH: tsConfig, NODE_ENV: 'test', FORCE_COLOR: '0', NO_COLOR: '1' },
-    }),
+    node(
+      ['--import', 'tsx', tool('jasmine'), `--config=${folder}/jasmine.json`, '--helper=.ci/patience.mjs'],
+      {
+        env: { TSX_TSCONFIG_PATH: tsConfig, NODE_ENV: 'test', FORCE_COLOR: '0', NO_COLOR: '1' },
+      },
+    ),
 });
 
 /** What is quick and needs no browser: the whole of `npm run check`. */
