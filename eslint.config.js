@@ -156,6 +156,10 @@ export default defineConfig(
           message: 'The time comes in as an argument.',
         },
         { selector: 'CallExpression[callee.name="Date"]', message: 'The time comes in as an argument.' },
+        {
+          selector: 'ImportDeclaration[source.value="zod"] > ImportSpecifier[imported.name="z"]',
+          message: "import * as z: the named export brings every language's messages into the page.",
+        },
       ],
     },
   },

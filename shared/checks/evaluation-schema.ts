@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { WARNING_SEVERITIES } from './check.js';
 import type { Evaluation } from './evaluation.js';
 

@@ -11,7 +11,7 @@ import {
   stackOf,
 } from '../forging/testing/designs.js';
 import { formatFor } from '../units/index.js';
-import { z } from 'zod';
+import * as z from 'zod';
 import {
   CHECKS,
   type Evaluation,

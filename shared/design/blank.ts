@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** Outlines of a blade that have a name; the shop draws others by hand. */
 export const BLADE_OUTLINES = [
