@@ -9,17 +9,21 @@ await install();
 const kernel = await buildKernel();
 if (kernel.code !== 0) stopWith(kernel.output);
 
+const host = '127.0.0.1';
+const clientPort = process.env.PORT ?? '4200';
 // The port that src/proxy.conf.json sends /api to.
+const serverPort = '4210';
+
 const server = start(
   process.execPath,
   [tool('tsx'), 'watch', '--tsconfig', 'server/tsconfig.json', 'server/main.ts'],
   {
-    env: { HOST: '127.0.0.1', PORT: '4210' },
+    env: { HOST: host, PORT: serverPort, PUBLIC_URL: `http://${host}:${clientPort}` },
   },
 );
 const client = start(
   process.execPath,
-  [tool('@angular/cli', 'ng'), 'serve', '--host=127.0.0.1', `--port=${process.env.PORT ?? 4200}`],
+  [tool('@angular/cli', 'ng'), 'serve', `--host=${host}`, `--port=${clientPort}`],
   { env: { NG_CLI_ANALYTICS: 'false' } },
 );
 
