@@ -14,7 +14,18 @@ const stopListening = endOnSignal();
 endWithNpm();
 
 await install();
-const { code, output } = await build((line) => const named = reachable.includes(':') ? `[${reachable}]` : reachable;
+const { code, output } = await build((line) => process.stdout.write(line));
+if (code !== 0) stopWith(`${output}\nThe build failed; see the lines above.`);
+
+// From here on this process is the server: signals reach it directly, and it shuts down in its own order.
+stopListening();
+process.env.NODE_ENV ??= 'production';
+process.setSourceMapsEnabled(true);
+const main = join(root, 'dist', 'server', 'server', 'main.js');
+process.argv[1] = main;
+await import(pathToFileURL(main).href);
+await answering();
+const named = reachable.includes(':') ? `[${reachable}]` : reachable;
 process.stdout.write(`\nLayerwright is at ${process.env.PUBLIC_URL || `http://${named}:${port}`}\n`);
 
 /** Resolves when the server answers its health route. It logs itself why, should it not. */
