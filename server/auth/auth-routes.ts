@@ -1,7 +1,13 @@
 import type { CrossSiteGuard } from '../http/cross-site.js';
 import { type RateLimitConfig, limitedByAddress } from '../http/rate-limits.js';
 import type { Routes } from '../http/routes.js';
-import { credentialsSchema, registrationSchema, signedInSchema, tokenSchema } from './auth-schemas.js';
+import {
+  credentialsSchema,
+  registrationSchema,
+  sessionSchema,
+  signedInSchema,
+  tokenSchema,
+} from './auth-schemas.js';
 import type { AuthService } from './auth-service.js';
 import type { SignIn } from './sign-in.js';
 
@@ -136,5 +142,28 @@ export function addAuthRoutes(routes: Routes, parts: AuthRouteParts): void {
       problems: ['sign-in-required'],
     },
     handle: async ({ account }) => ({ status: 200, json: await service.signedIn(account) }),
+  });
+
+  routes.add({
+    method: 'GET',
+    path: '/api/auth/session',
+    operation: {
+      id: 'getSession',
+      tag: 'Accounts',
+      summary: 'Say whether anyone is signed in',
+      description: 'For a page that opens: who is signed in, or that nobody is, which is no error.',
+      answers: {
+        200: {
+          description: 'Who is signed in, if anyone',
+          schema: sessionSchema,
+          example: { signedIn: EXAMPLE },
+        },
+      },
+      problems: [],
+    },
+    handle: async ({ request }) => ({
+      status: 200,
+      json: { signedIn: request.user ? await service.signedIn(request.user) : null },
+    }),
   });
 }

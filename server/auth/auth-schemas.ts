@@ -41,4 +41,8 @@ export const signedInSchema = z.strictObject({
     .describe('The shops that the account belongs to, and as what'),
 });
 
+export const sessionSchema = z.strictObject({
+  signedIn: signedInSchema.nullable().describe('Null when nobody is signed in'),
+});
+
 export const tokenSchema = z.strictObject({ token: z.string() });

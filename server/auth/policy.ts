@@ -23,6 +23,7 @@ export const POLICY: Readonly<Record<string, Rule>> = {
   'POST /api/auth/login': 'anyone',
   'POST /api/auth/logout': 'anyone',
   'GET /api/auth/me': 'signedIn',
+  'GET /api/auth/session': 'anyone',
 
   'GET /api/designs': 'signedIn',
   'POST /api/designs': 'signedIn',

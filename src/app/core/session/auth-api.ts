@@ -1,6 +1,6 @@
 import { HttpClient } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
-import type { Observable } from 'rxjs';
+import { map, type Observable } from 'rxjs';
 
 export interface Account {
   readonly id: string;
@@ -37,8 +37,11 @@ export interface Registration extends Credentials {
 export class AuthApi {
   private readonly http = inject(HttpClient);
 
-  me(): Observable<SignedIn> {
-    return this.http.get<SignedIn>('/api/auth/me');
+  /** Who is signed in; null when nobody is. */
+  session(): Observable<SignedIn | null> {
+    return this.http
+      .get<{ signedIn: SignedIn | null }>('/api/auth/session')
+      .pipe(map(({ signedIn }) => signedIn));
   }
 
   register(registration: Registration): Observable<SignedIn> {

@@ -27,7 +27,7 @@ describe('SessionStore', () => {
     session.load();
     session.load();
     expect(session.state().status).toBe('loading');
-    server.expectOne('/api/auth/me').flush(ME);
+    server.expectOne('/api/auth/session').flush({ signedIn: ME });
     session.load();
     expect(session.state()).toEqual({ status: 'member', ...ME });
     expect(session.account()?.name).toBe('Ada');
@@ -35,10 +35,10 @@ describe('SessionStore', () => {
 
   it('knows a visitor from a server that could not say, and asks that one again', () => {
     session.load();
-    answerNothing(server.expectOne('/api/auth/me'));
+    answerNothing(server.expectOne('/api/auth/session'));
     expect(session.state().status).toBe('failed');
     session.load();
-    answerProblem(server.expectOne('/api/auth/me'), 401, 'sign-in-required');
+    server.expectOne('/api/auth/session').flush({ signedIn: null });
     expect(session.state().status).toBe('visitor');
   });
 
@@ -58,7 +58,7 @@ describe('SessionStore', () => {
 
   it('stays signed in while signing out fails', () => {
     session.load();
-    server.expectOne('/api/auth/me').flush(ME);
+    server.expectOne('/api/auth/session').flush({ signedIn: ME });
     let hasFailed = false;
     session.signOut().subscribe({ error: () => (hasFailed = true) });
     server.expectOne('/api/auth/csrf').flush({ token: 'member' });
@@ -68,7 +68,7 @@ describe('SessionStore', () => {
 
   it('ends when any answer says that nobody is signed in', () => {
     session.load();
-    server.expectOne('/api/auth/me').flush(ME);
+    server.expectOne('/api/auth/session').flush({ signedIn: ME });
     TestBed.inject(HttpClient)
       .get('/api/designs')
       .subscribe({ error: () => undefined });

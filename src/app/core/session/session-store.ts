@@ -1,7 +1,6 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
 import { type Observable, tap } from 'rxjs';
 import { CsrfToken } from '../http/csrf-token';
-import { ProblemError } from '../http/problem-error';
 import { AuthApi, type Credentials, type Registration, type SignedIn } from './auth-api';
 
 /** Who is at the bench: not known yet, nobody with an account, a member, or the server could not say. */
@@ -30,10 +29,10 @@ export class SessionStore {
     if (this.hasAsked && this.current().status !== 'failed') return;
     this.hasAsked = true;
     this.current.set({ status: 'loading' });
-    this.api.me().subscribe({
-      next: (signedIn) => this.current.set({ status: 'member', ...signedIn }),
-      error: (error: unknown) =>
-        this.current.set(isNobody(error) ? { status: 'visitor' } : { status: 'failed', error }),
+    this.api.session().subscribe({
+      next: (signedIn) =>
+        this.current.set(signedIn ? { status: 'member', ...signedIn } : { status: 'visitor' }),
+      error: (error: unknown) => this.current.set({ status: 'failed', error }),
     });
   }
 
@@ -61,8 +60,4 @@ export class SessionStore {
     this.hasAsked = true;
     this.current.set({ status: 'member', ...signedIn });
   }
-}
-
-function isNobody(error: unknown): boolean {
-  return error instanceof ProblemError && error.status === 401;
 }
