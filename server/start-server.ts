@@ -1,5 +1,6 @@
 import { type Server, createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
+import { setTimeout as sleep } from 'node:timers/promises';
 import type { Logger } from 'pino';
 import { ComputePool } from './compute/compute-pool.js';
 import { compose } from './composition.js';
@@ -7,6 +8,10 @@ import type { Config } from './config.js';
 import { openDatabase } from './db/open-database.js';
 import type { Health } from './health/health.js';
 import { sessionSecretIn } from './session-secret.js';
+
+/** The server goes on answering until nobody has come for this long, or until the second time is over. */
+const GOODBYE_MS = 400;
+const GOODBYE_MAX_MS = 3_000;
 
 /** How long answers that are under way may take when the server ends. */
 const PATIENCE_MS = 8_000;
@@ -26,6 +31,8 @@ export async function startServer(
 ): Promise<RunningServer> {
   const database = await openDatabase({ folder: config.dataFolder, log, onBroken });
   const compute = new ComputePool();
+  // The first request is not to wait for it; should it fail, that request says why.
+  compute.warmUp().catch((error: unknown) => log.warn({ err: error }, 'A thread could not be started'));
   try {
     const secret = config.sessionSecret ?? (await sessionSecretIn(config.dataFolder));
     const { express, health, housekeeping, seed } = compose({
@@ -87,14 +94,20 @@ function urlOf(server: Server, host: string): string {
   return `http://${host.includes(':') ? `[${host}]` : host}:${port}`;
 }
 
-/** Lets answers that are under way be finished, but not for ever. */
+/**
+ * Lets answers that are under way be finished, but not for ever. While requests still come in, each answer says that its
+ * connection ends here: one that is simply closed may have a request on its way to us.
+ */
 async function finish(server: Server, health: Health): Promise<void> {
+  let lastRequest = performance.now();
+  server.on('request', () => (lastRequest = performance.now()));
   health.stopping();
-  const closed = new Promise<void>((resolve) => server.close(() => resolve()));
-  // Connections become idle as their answers go out.
-  const sweep = setInterval(() => server.closeIdleConnections(), 50);
   const patience = setTimeout(() => server.closeAllConnections(), PATIENCE_MS);
-  await closed;
+  const latest = performance.now() + GOODBYE_MAX_MS;
+  do await sleep(GOODBYE_MS / 4);
+  while (performance.now() < latest && performance.now() - lastRequest < GOODBYE_MS);
+  const sweep = setInterval(() => server.closeIdleConnections(), 100);
+  await new Promise<void>((resolve) => server.close(() => resolve()));
   clearInterval(sweep);
   clearTimeout(patience);
 }

@@ -45,13 +45,21 @@ export class SessionStore extends Store {
   }
 
   override set(secret: string, session: SessionData, callback?: Callback): void {
-    this.#save(keyOf(secret), session).then(() => callback?.(), callback);
+    this.#save(keyOf(secret), session).then(
+      () => callback?.(),
+      (error: unknown) => callback?.(error),
+    );
   }
 
   override destroy(secret: string, callback?: Callback): void {
     const id = keyOf(secret);
     this.#touched.delete(id);
-    this.units.write((manager) => manager.delete(SessionRow, { id })).then(() => callback?.(), callback);
+    this.units
+      .write((manager) => manager.delete(SessionRow, { id }))
+      .then(
+        () => callback?.(),
+        (error: unknown) => callback?.(error),
+      );
   }
 
   override touch(secret: string, _session: SessionData, callback?: Callback): void {
@@ -88,7 +96,7 @@ export class SessionStore extends Store {
       return null;
     if (!this.#touched.has(id)) this.#remember(id, Date.parse(row.expiresAt) - SESSION_IDLE_MS);
     const data: unknown = JSON.parse(row.dataJson);
-    return storedSchema.parse(data) as unknown as SessionData;
+    return storedSchema.parse(data);
   }
 
   async #save(id: string, session: SessionData): Promise<void> {

@@ -45,9 +45,11 @@ export class SignIn {
     });
     this.middleware = [
       cookieParser(),
+      byHttps(parts.isSecure),
       session({
         name: this.#sessionCookie,
         secret: parts.secret,
+        proxy: parts.isSecure,
         store: parts.store,
         resave: false,
         saveUninitialized: false,
@@ -106,6 +108,17 @@ export class SignIn {
       void authenticate(request, response, done);
     });
   }
+}
+
+/**
+ * Where people come by HTTPS it ends at a proxy, which need not say so. The session's cookie is for HTTPS only, and would
+ * not be given out at all to a request that seems to come without.
+ */
+function byHttps(isSecure: boolean): RequestHandler {
+  return (request, _response, next) => {
+    if (isSecure) request.headers['x-forwarded-proto'] = 'https';
+    next();
+  };
 }
 
 function asError(error: unknown): Error {

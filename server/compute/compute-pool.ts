@@ -7,11 +7,14 @@ import type { TaskMessage, TaskReply } from './worker.js';
 export interface ComputePoolOptions {
   /** Threads at most. */
   readonly threads?: number;
-  /** The longest that a task may take, ms. Its memory is bounded by this too. */
+  /** The longest that working a design out may take, ms. Its memory is bounded by this too. */
   readonly limitMs?: number;
 }
 
 const MAY_WAIT = 100;
+
+/** Printing lays out pages as well, and may have to load fonts first. */
+const PRINT_FACTOR = 4;
 
 /**
  * Does tasks on worker threads, so that a large design neither holds up other requests nor can be used to bring the
@@ -31,10 +34,17 @@ export class ComputePool implements Compute {
   run<N extends TaskName>(name: N, input: TaskInput<N>): Promise<TaskOutput<N>> {
     return this.#bounded.run(async () => {
       const worker = this.#idle.pop() ?? (await this.#start());
-      const message: TaskMessage = { name, input };
-      const output = await this.#reply(worker, message);
+      const isPrint = name === 'forgeCard' || name === 'cutSheet';
+      const output = await reply(worker, { name, input }, this.#limitMs * (isPrint ? PRINT_FACTOR : 1));
       this.#idle.push(worker);
       return output as TaskOutput<N>;
+    });
+  }
+
+  /** Starts a thread before it is needed. */
+  async warmUp(): Promise<void> {
+    await this.#bounded.run(async () => {
+      this.#idle.push(await this.#start());
     });
   }
 
@@ -56,31 +66,33 @@ export class ComputePool implements Compute {
     return worker;
   }
 
-  async #reply(worker: Worker, message: TaskMessage): Promise<unknown> {
-    const timer = new AbortController();
-    const timeout = setTimeout(() => timer.abort(), this.#limitMs);
-    try {
-      worker.postMessage(message);
-      const [reply] = (await once(worker, 'message', { signal: timer.signal })) as [TaskReply];
-      if (reply.kind === 'done') return reply.output;
-      // The thread is sound, but it may be holding what the task left behind.
-      await worker.terminate();
-      throw Object.assign(new Error(reply.kind === 'failed' ? reply.message : 'The thread started anew.'), {
-        ...(reply.kind === 'failed' ? { stack: reply.stack } : {}),
-      });
-    } catch (error) {
-      await worker.terminate();
-      throw timer.signal.aborted
-        ? new TooMuchWorkError(`The task took longer than ${this.#limitMs} ms.`)
-        : error;
-    } finally {
-      clearTimeout(timeout);
-    }
-  }
-
   #forget(worker: Worker): void {
     this.#all.delete(worker);
     const at = this.#idle.indexOf(worker);
     if (at >= 0) this.#idle.splice(at, 1);
+  }
+}
+
+/** What a thread makes of a task. Unless it answers, and in time, the thread is ended: nobody knows what it holds. */
+async function reply(worker: Worker, message: TaskMessage, limitMs: number): Promise<unknown> {
+  const ended = new AbortController();
+  const timeout = setTimeout(
+    () => ended.abort(new TooMuchWorkError(`The task took longer than ${limitMs} ms.`)),
+    limitMs,
+  );
+  const onExit = (): void => ended.abort(new Error('The thread has ended.'));
+  worker.once('exit', onExit);
+  try {
+    worker.postMessage(message);
+    const [answer] = (await once(worker, 'message', { signal: ended.signal })) as [TaskReply];
+    if (answer.kind === 'done') return answer.output;
+    throw Object.assign(new Error('The task failed.'), answer);
+  } catch (error) {
+    worker.off('exit', onExit);
+    await worker.terminate();
+    throw ended.signal.aborted ? ended.signal.reason : error;
+  } finally {
+    clearTimeout(timeout);
+    worker.off('exit', onExit);
   }
 }

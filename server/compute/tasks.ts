@@ -1,7 +1,7 @@
 import { type Evaluation, assess } from '../../shared/checks/index.js';
 import type { Design } from '../../shared/design/index.js';
 import { type Forging, evaluate } from '../../shared/forging/index.js';
-import { type SheetOrder, printCutSheet, printForgeCard } from '../cards/print.js';
+import type { SheetOrder } from '../cards/print.js';
 
 /** Why a design has no result: the step (or the start of a bar) that cannot be done. */
 export interface RefusedStep {
@@ -45,9 +45,12 @@ export const TASKS = {
     };
   },
 
-  forgeCard: (order: SheetOrder): Promise<Uint8Array> => printForgeCard(order),
+  // What prints takes longer to load than everything else together, and is seldom asked for.
+  forgeCard: async (order: SheetOrder): Promise<Uint8Array> =>
+    (await import('../cards/print.js')).printForgeCard(order),
 
-  cutSheet: (order: SheetOrder): Promise<Uint8Array> => printCutSheet(order),
+  cutSheet: async (order: SheetOrder): Promise<Uint8Array> =>
+    (await import('../cards/print.js')).printCutSheet(order),
 } as const;
 
 export type TaskName = keyof typeof TASKS;

@@ -1,4 +1,4 @@
-import { IsNull, LessThan, Like } from 'typeorm';
+import { type FindOperator, IsNull, LessThan, Raw } from 'typeorm';
 import { Design, Membership } from '../db/entities/index.js';
 import type { Unit, Units } from '../db/units.js';
 import type { DesignFigures } from '../compute/tasks.js';
@@ -55,7 +55,7 @@ export class DesignRepository {
         where: {
           ownerId,
           deletedAt: IsNull(),
-          ...(search === '' ? {} : { searchKey: Like(`%${searchKeyOf(search).replace(/[%_]/g, ' ')}%`) }),
+          ...(search === '' ? {} : { searchKey: containing(searchKeyOf(search)) }),
         },
         select: { id: true, name: true, revision: true, updatedAt: true, summaryJson: true },
         order: { updatedAt: 'DESC', id: 'ASC' },
@@ -111,6 +111,12 @@ export class DesignRepository {
 /** Capitals and the way accents are written make no difference to a search. */
 function searchKeyOf(text: string): string {
   return text.normalize('NFKC').toLowerCase();
+}
+
+function containing(text: string): FindOperator<string> {
+  const pattern = `%${text.replace(/[%_\\]/g, '\\$&')}%`;
+  // Its type says nothing of the column.
+  return Raw((column) => `${column} LIKE :pattern ESCAPE '\\'`, { pattern }) as FindOperator<string>;
 }
 
 function listed(row: Design): ListedDesign {

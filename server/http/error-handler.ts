@@ -1,4 +1,4 @@
-import type { ErrorRequestHandler, Request, Response } from 'express';
+import type { ErrorRequestHandler, Response } from 'express';
 import { StorageUnavailableError } from '../db/units.js';
 import { Problem, type ProblemCode } from './problem.js';
 
@@ -21,17 +21,17 @@ export const errorHandler: ErrorRequestHandler = (error: unknown, request, respo
     next(error);
     return;
   }
-  sendProblem(request, response, problem);
+  sendProblem(response, problem);
 };
 
-export function sendProblem(request: Request, response: Response, problem: Problem): void {
+function sendProblem(response: Response, problem: Problem): void {
   response.removeHeader('ETag');
   response.removeHeader('Content-Type');
   response
     .status(problem.status)
     .set({ 'Cache-Control': 'no-store', ...problem.more.headers })
     .type('application/problem+json')
-    .send(JSON.stringify(problem.document(String(request.id))));
+    .send(JSON.stringify(problem.document(String(response.getHeader('X-Request-Id')))));
 }
 
 function problemFrom(error: unknown): Problem {

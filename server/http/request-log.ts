@@ -28,11 +28,11 @@ export function requestLog(log: Logger): RequestHandler {
       return id;
     },
     // Who watches over the server asks every few seconds.
-    autoLogging: { ignore: (request) => request.url?.startsWith('/api/health') ?? false },
+    autoLogging: { ignore: (request) => request.url.startsWith('/api/health') },
     customLogLevel: (request, response, error) => {
       if (error || response.statusCode >= 500) return 'error';
       if (response.statusCode >= 400) return 'warn';
-      return request.url?.startsWith('/api/') ? 'info' : 'debug';
+      return request.url.startsWith('/api/') ? 'info' : 'debug';
     },
     // Neither headers nor the query: they hold cookies, tokens and what people look for.
     serializers: {
