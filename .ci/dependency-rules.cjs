@@ -88,7 +88,7 @@ module.exports = {
     },
     {
       from: { path: `^server/.*(?:${spec})` },
-      to: { path: installed('supertest/|superagent/|fast-check/|jasmine|pngjs/|jsqr/|sql\\.js/') },
+      to: { dependencyTypes: ['npm', 'npm-dev'], path: 'node_modules/', pathNot: installed(serverNever) },
     },
 
     // The page starts with main.ts, which knows the application; its routes know the door of each feature.
@@ -112,7 +112,7 @@ module.exports = {
     // The journeys see the application as its users do: in a browser, over HTTP.
     { from: { path: '^e2e/' }, to: { path: ['^e2e/', `^shared/[^/]+${index}`] } },
     { from: { path: '^e2e/' }, to: { dependencyTypes: ['core'] } },
-    { from: { path: '^e2e/' }, to: { path: installed('playwright-core/|axe-core/|jasmine|pngjs/|jsqr/') } },
+    { from: { path: '^e2e/' }, to: { dependencyTypes: ['npm-dev'], path: 'node_modules/' } },
   ],
 
   forbidden: [
