@@ -4,7 +4,7 @@ export const ARROW_HALF_PX = 1.6;
 /** Between a figure and what is beside it, px. */
 const GAP_PX = 5;
 /** How far the line goes on past an arrow that points inward, px. */
-const TAIL_PX = 14;
+const TAIL_PX = 8;
 
 /** An arrowhead on a dimension line: its tip, and which way it points. */
 export interface Arrow {
@@ -19,6 +19,8 @@ export interface DimensionLine {
   readonly arrows: readonly Arrow[];
   /** The middle of the figure. */
   readonly figurePx: number;
+  /** Whether the figure stands beside the line, for want of room in it. */
+  readonly isBeside: boolean;
   /** Ends whose extension line is drawn; an end off the sheet has none. */
   readonly extensions: readonly number[];
 }
@@ -58,6 +60,7 @@ export function dimensionLine(
         ...(hasTo ? [{ atPx: toPx, points: 'forth' } as const] : []),
       ],
       figurePx,
+      isBeside: false,
       extensions,
     };
   }
@@ -72,12 +75,12 @@ export function dimensionLine(
     ...(hasTo ? [[toPx, after] as const] : []),
   ];
   if (lengthPx >= figureRoomPx - GAP_PX) {
-    return { lines: tails, arrows, figurePx: (start + end) / 2, extensions };
+    return { lines: tails, arrows, figurePx: (start + end) / 2, isBeside: false, extensions };
   }
   const forthPx = after + GAP_PX + figureLengthPx / 2;
   const backPx = before - GAP_PX - figureLengthPx / 2;
   const isForthSeen = forthPx + figureLengthPx / 2 <= seenTo;
   const isBackSeen = backPx - figureLengthPx / 2 >= seenFrom;
   const figurePx = isForthSeen || !isBackSeen ? Math.min(forthPx, seenTo - figureLengthPx / 2) : backPx;
-  return { lines: [...tails, [start, end]], arrows, figurePx, extensions };
+  return { lines: [...tails, [start, end]], arrows, figurePx, isBeside: true, extensions };
 }

@@ -50,7 +50,7 @@ export function drawDimension(
   context.stroke();
   for (const arrow of layout.arrows) drawArrow(context, arrow.atPx, atPx, arrow.points, isVertical);
   context.restore();
-  drawFigure(context, paper, layout, figure, atPx, isVertical, dimension.isLive === true);
+  drawFigure(context, paper, layout, dimension);
 }
 
 /** A filled arrowhead with its tip at a point. */
@@ -76,19 +76,26 @@ function drawFigure(
   context: CanvasRenderingContext2D,
   paper: Paper,
   layout: DimensionLine,
-  figure: string,
-  atPx: number,
-  isVertical: boolean,
-  isLive: boolean,
+  { direction, atPx, fromPx, toPx, figure, seenPx, isLive }: Dimension,
 ): void {
+  const ink = isLive ? paper.colours.ember : paper.colours.ink;
   context.save();
   context.font = FIGURE_FONT;
-  context.textAlign = 'center';
   context.textBaseline = 'middle';
-  context.translate(isVertical ? atPx : layout.figurePx, isVertical ? layout.figurePx : atPx);
-  // Read from the right-hand side of the sheet, as drawings are.
-  if (isVertical) context.rotate(-Math.PI / 2);
-  haloed(context, figure, 0, 0, isLive ? paper.colours.ember : paper.colours.ink, paper.colours.ground);
+  context.textAlign = 'center';
+  if (direction === 'horizontal') {
+    haloed(context, figure, layout.figurePx, atPx, ink, paper.colours.ground);
+  } else if (layout.isBeside) {
+    // Upright and level with what it measures, where there is no height to write along the line.
+    context.textAlign = 'right';
+    const middlePx = (Math.max(fromPx, seenPx[0]) + Math.min(toPx, seenPx[1])) / 2;
+    haloed(context, figure, atPx - ARROW_HALF_PX - 5, middlePx, ink, paper.colours.ground);
+  } else {
+    // Read from the right-hand side of the sheet, as drawings are.
+    context.translate(atPx, layout.figurePx);
+    context.rotate(-Math.PI / 2);
+    haloed(context, figure, 0, 0, ink, paper.colours.ground);
+  }
   context.restore();
 }
 
