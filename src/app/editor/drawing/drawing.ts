@@ -2,11 +2,11 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { insertLayers, moveLayers, setThickness } from '@shared/design';
 import { kindOf } from '@shared/steps';
 import { UnitsStore } from '../../core/units/units-store';
+import { BarCanvas } from '../canvas/bar-canvas';
 import type { AssemblyGesture, GestureEnd, StackGesture } from '../canvas/contract';
 import { StackCanvas } from '../canvas/stack-canvas';
 import { DesignStore } from '../design-store';
 import { editPiece, insertPiece, layerLike, movePiece, setAlong } from '../document-edits';
-import { BarSketch } from '../sketch/bar-sketch';
 import { placesAfterMove } from '../twin/layer-work';
 import { stockThicknessesMm } from './stock-thicknesses';
 
@@ -16,7 +16,7 @@ import { stockThicknessesMm } from './stock-thicknesses';
  */
 @Component({
   selector: 'lw-drawing',
-  imports: [BarSketch, StackCanvas],
+  imports: [BarCanvas, StackCanvas],
   templateUrl: './drawing.html',
   styleUrl: './drawing.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

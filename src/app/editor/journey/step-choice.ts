@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, output, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, ViewEncapsulation, output, viewChild } from '@angular/core';
 import { MatMenu, MatMenuContent, MatMenuItem } from '@angular/material/menu';
 import { STEP_KINDS, STEP_KIND_NAMES, type StepKindName } from '@shared/steps';
 
@@ -7,6 +7,9 @@ import { STEP_KINDS, STEP_KIND_NAMES, type StepKindName } from '@shared/steps';
   selector: 'lw-step-choice',
   imports: [MatMenu, MatMenuContent, MatMenuItem],
   templateUrl: './step-choice.html',
+  styleUrl: './step-choice.scss',
+  // The menu opens outside of this component's element.
+  encapsulation: ViewEncapsulation.None,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class StepChoice {

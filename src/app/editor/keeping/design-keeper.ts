@@ -15,7 +15,6 @@ import {
   map,
   merge,
   of,
-  tap,
   timeout,
 } from 'rxjs';
 import { DesignsApi, type SaveResult, type StoredDesign } from '../../core/designs/designs-api';
@@ -189,9 +188,10 @@ export class DesignKeeper {
   keepAsCopy(name: string): Observable<StoredDesign> {
     const key = this.keeping()?.key;
     return this.api.create({ ...this.store.design(), name }).pipe(
-      tap(() => {
+      concatMap(async (copy) => {
         this.keeping.set(null);
-        if (key !== undefined) void this.writer.remove(key);
+        if (key !== undefined) await this.writer.remove(key);
+        return copy;
       }),
     );
   }

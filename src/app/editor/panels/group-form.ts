@@ -75,7 +75,7 @@ export class GroupForm {
   protected add(): void {
     this.group.update((group) => {
       const used = new Set(group.layers.map((layer) => layer.steel));
-      const steel = this.atHand().find((id) => !used.has(id)) ?? group.layers[0]?.steel;
+      const steel = this.atHand().find((id) => !used.has(id)) ?? group.layers[0]?.steel ?? '';
       return {
         ...group,
         layers: [...group.layers, { steel, thicknessMm: group.layers[0]?.thicknessMm ?? 3 }],

@@ -18,7 +18,7 @@ export interface Sketch {
 }
 
 /** Bands finer than this can't be told apart in a sketch, px. */
-const FINEST_BAND_PX = 1.6;
+const FINEST_BAND_PX = 1.1;
 /** Distance of the lines that stand for many fine layers, px. */
 const LINE_PITCH_PX = 2.5;
 /** Layers looked at, at most, for the mean tone of a section. */

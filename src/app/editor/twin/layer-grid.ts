@@ -1,8 +1,10 @@
 import { CdkFixedSizeVirtualScroll, CdkVirtualForOf, CdkVirtualScrollViewport } from '@angular/cdk/scrolling';
+import type { ListRange } from '@angular/cdk/collections';
 import {
   ChangeDetectionStrategy,
   Component,
   DOCUMENT,
+  DestroyRef,
   ElementRef,
   Injector,
   afterNextRender,
@@ -12,8 +14,10 @@ import {
   signal,
   viewChild,
 } from '@angular/core';
+import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import type { Stack } from '@shared/design';
 import { readLengthField } from '@shared/units';
+import { filter, startWith, take } from 'rxjs';
 import { UnitsStore } from '../../core/units/units-store';
 import { steelGroups } from '../../ui/steel-picker/steel-groups';
 import { SteelSwatch } from '../../ui/steel-swatch/steel-swatch';
@@ -49,7 +53,14 @@ export class LayerGrid {
   private readonly units = inject(UnitsStore);
   private readonly element = inject<ElementRef<HTMLElement>>(ElementRef);
   private readonly injector = inject(Injector);
+  private readonly destroyRef = inject(DestroyRef);
   private readonly viewport = viewChild.required(CdkVirtualScrollViewport);
+  private readonly drawn = signal<ListRange>({ start: 0, end: 0 });
+  /** Whether the keyboard's cell is in the page; scrolled far away it isn't, and the grid takes its place in the tab order. */
+  protected readonly isPointDrawn = computed(() => {
+    const { row } = this.point();
+    return row >= this.drawn().start && row < this.drawn().end;
+  });
 
   private readonly stack = computed(() => this.store.selected().bar.start as Stack);
   protected readonly rows = computed(() =>
@@ -76,6 +87,17 @@ export class LayerGrid {
   protected readonly refusal = signal<string | null>(null);
   /** Rows are as high as a finger needs them where a finger points. */
   protected readonly rowPx = inject(DOCUMENT).defaultView?.matchMedia('(pointer: coarse)').matches ? 44 : 34;
+
+  constructor() {
+    afterNextRender(() => {
+      this.viewport()
+        .renderedRangeStream.pipe(
+          startWith(this.viewport().getRenderedRange()),
+          takeUntilDestroyed(this.destroyRef),
+        )
+        .subscribe((range) => this.drawn.set(range));
+    });
+  }
 
   protected readonly byPlace = (_: number, row: LayerRow): number => row.place;
 
@@ -241,16 +263,29 @@ export class LayerGrid {
   }
 
   private goToPlace(place: number): void {
+    this.anchor = place;
     this.point.update(({ column }) => ({ row: this.rows().length - 1 - place, column }));
     this.focusPoint();
   }
 
-  private focusPoint(): void {
-    this.showRow(this.point().row);
-    afterNextRender(
-      () => this.element.nativeElement.querySelector<HTMLElement>('[role=gridcell][tabindex="0"]')?.focus(),
-      { injector: this.injector },
-    );
+  /** Brings the keyboard to its cell, and the cell into view; a row far away has to be drawn first. */
+  protected focusPoint(): void {
+    const { row } = this.point();
+    this.showRow(row);
+    this.viewport()
+      .renderedRangeStream.pipe(
+        startWith(this.viewport().getRenderedRange()),
+        filter(({ start, end }) => row >= start && row < end),
+        take(1),
+        takeUntilDestroyed(this.destroyRef),
+      )
+      .subscribe(() =>
+        afterNextRender(
+          () =>
+            this.element.nativeElement.querySelector<HTMLElement>('[role=gridcell][tabindex="0"]')?.focus(),
+          { injector: this.injector },
+        ),
+      );
   }
 
   private showRow(row: number): void {
