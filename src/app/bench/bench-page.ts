@@ -2,12 +2,13 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { SessionStore } from '../core/session/session-store';
 import { DesignList } from './design-list';
 import { FailedPanel } from './failed-panel';
+import { KeptList } from './kept-list';
 import { Welcome } from './welcome';
 
 /** The first page: a member's designs; for everyone else what this is, and a way to begin at once. */
 @Component({
   selector: 'lw-bench-page',
-  imports: [DesignList, FailedPanel, Welcome],
+  imports: [DesignList, FailedPanel, KeptList, Welcome],
   template: `
     @switch (session.state().status) {
       @case ('member') {
@@ -20,9 +21,10 @@ import { Welcome } from './welcome';
         <lw-welcome>
           <lw-failed-panel
             title="The server can’t be reached"
-            text="Your designs are safe there, but can’t be shown now. Drafts in this browser can be worked on."
+            text="Your designs are safe there, but can’t be shown now. What this browser has can be worked on."
             (again)="session.load()"
           />
+          <lw-kept-list />
         </lw-welcome>
       }
       @default {

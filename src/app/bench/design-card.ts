@@ -27,6 +27,8 @@ import { Moment } from './moment';
 export class DesignCard {
   private readonly units = inject(UnitsStore);
   readonly design = input.required<DesignListItem>();
+  /** Whether this browser has changes of it that the server does not have. */
+  readonly isUnsaved = input(false);
   readonly copied = output();
   readonly deleted = output();
 

@@ -7,6 +7,7 @@ import { MatInputHarness } from '@angular/material/input/testing';
 import { MatSelectHarness } from '@angular/material/select/testing';
 import { MatSnackBarHarness } from '@angular/material/snack-bar/testing';
 import { provideRouter } from '@angular/router';
+import { DraftStore } from '../core/drafts/draft-store';
 import { DRAFT_SHELVES, memoryShelf } from '../core/drafts/draft-shelf';
 import { CsrfToken } from '../core/http/csrf-token';
 import { provideIcons } from '../core/icons/provide-icons';
@@ -14,11 +15,12 @@ import { SHELL_ICONS } from '../core/icons/shell-icons';
 import { READER_LOCALE } from '../core/settings/reader-locale';
 import { LOCAL_STORAGE } from '../core/settings/settings';
 import { designBody, designNamed, listed } from '../core/testing/designs';
-import { answerProblem } from '../core/testing/problem-answer';
+import { answerNothing, answerProblem } from '../core/testing/problem-answer';
 import { provideHttpForSpec } from '../core/testing/provide-http';
 import { UnitsStore } from '../core/units/units-store';
 import { BENCH_ICONS } from './bench-icons';
 import { DesignList } from './design-list';
+import { KeptHere } from './kept-here';
 import { DesignCardHarness } from './testing/design-card-harness';
 
 const THREE = [
@@ -124,6 +126,23 @@ describe('DesignList', () => {
     created.flush(designBody('d3', designNamed('Knife (copy 2)')), { headers: { ETag: '"1"' } });
     answerList([listed('d1', 'Knife'), listed('d2', 'Knife (copy)'), listed('d3', 'Knife (copy 2)')]);
     expect((await names()).length).toBe(3);
+  });
+
+  it('marks designs whose changes only this browser has, and lists them while the server is away', async () => {
+    const base = { revision: 1, etag: '"1"' };
+    const savedAt = '2026-03-04T08:00:00.000Z';
+    const drafts = TestBed.inject(DraftStore);
+    await drafts.put({ key: 'd1', document: designNamed('Kitchen knife'), history: null, base, savedAt });
+    await TestBed.inject(KeptHere).load();
+    answerList(THREE);
+    const marked = await Promise.all((await cards()).map((card) => card.isUnsaved()));
+    expect(marked).toEqual([false, false, true]);
+
+    fixture.componentInstance['store'].load();
+    answerNothing(request('GET', '/api/designs'));
+    await fixture.whenStable();
+    const link = (fixture.nativeElement as HTMLElement).querySelector('lw-kept-list a');
+    expect(link?.getAttribute('href')).toBe('/designs/d1');
   });
 
   it('never takes a failure for an empty bench', async () => {

@@ -27,6 +27,8 @@ import { BenchStore } from './bench-store';
 import { DesignCard } from './design-card';
 import { DraftList } from './draft-list';
 import { FailedPanel } from './failed-panel';
+import { KeptHere } from './kept-here';
+import { KeptList } from './kept-list';
 import { StarterGallery } from './starter-gallery';
 
 /** A member's designs: find, open, begin, copy and throw away. */
@@ -36,6 +38,7 @@ import { StarterGallery } from './starter-gallery';
     DesignCard,
     DraftList,
     FailedPanel,
+    KeptList,
     MatButton,
     MatFormField,
     MatIcon,
@@ -61,6 +64,7 @@ export class DesignList {
   private readonly adoption = inject(AdoptDrafts);
   protected readonly store = inject(BenchStore);
   protected readonly visitor = inject(VisitorDrafts);
+  protected readonly kept = inject(KeptHere);
 
   private readonly cards = viewChildren(DesignCard);
   private readonly title = viewChild.required<ElementRef<HTMLElement>>('title');
@@ -81,6 +85,7 @@ export class DesignList {
   constructor() {
     this.store.load();
     void this.visitor.load();
+    void this.kept.load();
   }
 
   protected async openStarters(): Promise<void> {

@@ -19,6 +19,11 @@ export class DesignCardHarness extends ComponentHarness {
     return Promise.all(values.map((value) => value.text()));
   }
 
+  /** Whether it says that its changes are not saved. */
+  async isUnsaved(): Promise<boolean> {
+    return (await this.locatorForOptional('.unsaved')()) !== null;
+  }
+
   /** @param verb what the button's name begins with */
   async press(verb: 'Duplicate' | 'Delete'): Promise<void> {
     for (const tool of await this.tools()) {

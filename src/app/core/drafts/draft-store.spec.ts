@@ -58,6 +58,15 @@ describe('DraftStore', () => {
     expect(back?.history?.past[0]?.bars).toBe(back?.document.bars);
   });
 
+  it('takes away the copies of saved designs and nothing else', async () => {
+    const store = freshStore(openDatabase);
+    await store.put({ ...draft('d1', 'Saved'), base: { revision: 3, etag: '"3"' }, isSaved: true });
+    await store.put({ ...draft('d2', 'Changed'), base: { revision: 3, etag: '"3"' } });
+    await store.put(draft('visitor', 'Visitor’s'));
+    await store.removeSaved();
+    expect((await store.list()).map(({ key }) => key).sort()).toEqual(['d2', 'visitor']);
+  });
+
   it('says so and goes on in memory where the database is closed', async () => {
     const store = freshStore(() => Promise.reject(new Error('closed')));
     expect(await store.get('visitor')).toBeUndefined();

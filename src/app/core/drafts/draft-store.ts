@@ -58,6 +58,13 @@ export class DraftStore {
     await this.reading((shelf) => shelf.remove(key), undefined);
   }
 
+  /** Takes away the copies of designs that the server has; unsaved work stays. */
+  async removeSaved(): Promise<void> {
+    for (const { key, isSaved } of await this.list()) {
+      if (isSaved) await this.remove(key);
+    }
+  }
+
   private async reading<T>(read: (shelf: DraftShelf) => Promise<T>, otherwise: T): Promise<T> {
     try {
       const result = await read(await this.open());

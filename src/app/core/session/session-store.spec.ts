@@ -1,6 +1,7 @@
 import { HttpClient } from '@angular/common/http';
 import { HttpTestingController } from '@angular/common/http/testing';
 import { TestBed } from '@angular/core/testing';
+import { DRAFT_SHELVES, memoryShelf } from '../drafts/draft-shelf';
 import { answerNothing, answerProblem } from '../testing/problem-answer';
 import { provideHttpForSpec } from '../testing/provide-http';
 import type { SignedIn } from './auth-api';
@@ -16,7 +17,12 @@ describe('SessionStore', () => {
   let server: HttpTestingController;
 
   beforeEach(() => {
-    TestBed.configureTestingModule({ providers: [provideHttpForSpec()] });
+    TestBed.configureTestingModule({
+      providers: [
+        provideHttpForSpec(),
+        { provide: DRAFT_SHELVES, useValue: () => Promise.resolve(memoryShelf()) },
+      ],
+    });
     session = TestBed.inject(SessionStore);
     server = TestBed.inject(HttpTestingController);
   });

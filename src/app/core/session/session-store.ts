@@ -1,5 +1,6 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
 import { type Observable, tap } from 'rxjs';
+import { DraftStore } from '../drafts/draft-store';
 import { CsrfToken } from '../http/csrf-token';
 import { AuthApi, type Credentials, type Registration, type SignedIn } from './auth-api';
 
@@ -15,6 +16,7 @@ export type SessionState =
 export class SessionStore {
   private readonly api = inject(AuthApi);
   private readonly csrf = inject(CsrfToken);
+  private readonly drafts = inject(DraftStore);
   private readonly current = signal<SessionState>({ status: 'loading' });
   private hasAsked = false;
 
@@ -45,7 +47,13 @@ export class SessionStore {
   }
 
   signOut(): Observable<void> {
-    return this.api.logout().pipe(tap(() => this.ended()));
+    return this.api.logout().pipe(
+      tap(() => {
+        this.ended();
+        // Whoever uses this browser next is not to find the designs of this account in it.
+        void this.drafts.removeSaved();
+      }),
+    );
   }
 
   /** The session is over: signed out here or elsewhere, or expired. */
