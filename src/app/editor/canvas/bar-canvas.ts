@@ -75,5 +75,7 @@ export class BarCanvas {
     return [{ id: 'bar', on: 'base', paint }];
   });
 
-  protected readonly text = computed(() => barText(this.bar(), this.overhangs(), this.lies(), this.format()));
+  protected readonly text = computed(() =>
+    barText(this.bar(), this.shown().overhangs, this.lies(), this.format()),
+  );
 }
