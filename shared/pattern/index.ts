@@ -16,3 +16,9 @@ export {
   type Window,
 } from './surfaces/surface.js';
 export { type PixelPoints, surfaceMap, surfacePoints } from './surfaces/surface-map.js';
+export { type Look, PLAIN_LOOK, USUAL_LOOK } from './picture/look.js';
+export { type Pixels, paint, paintSteelIndex } from './picture/paint.js';
+export { Picture, STAGES, type Stage } from './picture/picture.js';
+export type { PictureRequest } from './picture/request.js';
+export type { Counters } from './picture/sampler.js';
+export { NO_METAL, type Samples } from './picture/samples.js';

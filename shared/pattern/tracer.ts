@@ -24,8 +24,8 @@ export interface Tracer {
    */
   run(count: number, fromOp?: number): number;
   /**
-   * Carries out the first `ops` ops of the entry segment alone and leaves the coordinates there.
+   * Carries out ops of the entry segment alone, from `fromOp` to `toOp` (excluded), and leaves the coordinates there.
    * @returns ops carried out, summed over the points
    */
-  begin(count: number, ops: number): number;
+  begin(count: number, toOp: number, fromOp?: number): number;
 }

@@ -23,8 +23,8 @@ interface KernelExports {
   memoryFrom(): number;
   runSingle(segment: number, count: number, skip: number): number;
   runDouble(segment: number, count: number, skip: number): number;
-  beginSingle(segment: number, count: number, ops: number): number;
-  beginDouble(segment: number, count: number, ops: number): number;
+  beginSingle(segment: number, count: number, toOp: number, fromOp: number): number;
+  beginDouble(segment: number, count: number, toOp: number, fromOp: number): number;
 }
 
 /** The kernel, or null where WebAssembly or its vector instructions are missing. Takes a few milliseconds. */
@@ -86,7 +86,9 @@ export function kernelTracer(
     layer: new Uint16Array(buffer, addresses[11], capacity),
     run: (count, fromOp = 0) =>
       isDouble ? exports.runDouble(entry, count, fromOp) : exports.runSingle(entry, count, fromOp),
-    begin: (count, ops) =>
-      isDouble ? exports.beginDouble(entry, count, ops) : exports.beginSingle(entry, count, ops),
+    begin: (count, toOp, fromOp = 0) =>
+      isDouble
+        ? exports.beginDouble(entry, count, toOp, fromOp)
+        : exports.beginSingle(entry, count, toOp, fromOp),
   };
 }

@@ -37,9 +37,9 @@ export function referenceTracer(program: Program, capacity = CAPACITY): Tracer {
     z,
     layer,
     run: (count, fromOp = 0) => traceSegment(program, entry, points, layer, count, fromOp),
-    begin: (count, ops) => {
+    begin: (count, toOp, fromOp = 0) => {
       const first = program.segments[entry] as number;
-      return traceOps(program, points, first, first + ops, count);
+      return traceOps(program, points, first + fromOp, first + toOp, count);
     },
   };
 }

@@ -64,17 +64,17 @@ export function runDouble(segment: i32, count: i32, skip: i32): f64 {
   return done;
 }
 
-export function beginSingle(segment: i32, count: i32, ops: i32): f64 {
+export function beginSingle(segment: i32, count: i32, toOp: i32, fromOp: i32): f64 {
   done = 0;
   const first = load<i32>(segmentsAt + (segment as usize) * SEGMENT_BYTES);
-  traceOps<f32>(first, first + ops, pointsX, pointsY, pointsZ, count);
+  traceOps<f32>(first + fromOp, first + toOp, pointsX, pointsY, pointsZ, count);
   return done;
 }
 
-export function beginDouble(segment: i32, count: i32, ops: i32): f64 {
+export function beginDouble(segment: i32, count: i32, toOp: i32, fromOp: i32): f64 {
   done = 0;
   const first = load<i32>(segmentsAt + (segment as usize) * SEGMENT_BYTES);
-  traceOps<f64>(first, first + ops, pointsX, pointsY, pointsZ, count);
+  traceOps<f64>(first + fromOp, first + toOp, pointsX, pointsY, pointsZ, count);
   return done;
 }
 
