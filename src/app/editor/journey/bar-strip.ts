@@ -19,7 +19,7 @@ import type { StepKindName } from '@shared/steps';
 import type { Format } from '@shared/units';
 import { BarSketch } from '../sketch/bar-sketch';
 import { StepChoice } from './step-choice';
-import { type Tile, tileWords, tilesOf } from './tiles';
+import { type Tile, tilesOf } from './tiles';
 
 /** What is to be done with a step of the strip. */
 export type StepCommand = 'earlier' | 'later' | 'remove' | 'duplicate' | 'toggle';
@@ -71,8 +71,6 @@ export class BarStrip {
       this.tiles().findIndex((tile) => tile.stepId === id),
     );
   });
-
-  protected readonly words = (tile: Tile): string => tileWords(tile, this.tiles().length);
 
   /** Brings the keyboard to the selected tile once it is drawn. */
   focusSelected(): void {

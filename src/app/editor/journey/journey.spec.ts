@@ -32,7 +32,7 @@ describe('Journey', () => {
     ]);
     // 7 layers of 3.2 mm and 6 of 1.8 mm.
     expect((await journey.getSizes())[0]).toBe('95 × 40 × 33.2 mm');
-    expect((await journey.getLabels())[0]).toContain('13 layers');
+    expect((await journey.getContents())[0]).toContain('13 layers');
   });
 
   it('selects what is clicked', async () => {

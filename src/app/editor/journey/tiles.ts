@@ -70,15 +70,6 @@ export function tilesOf(
   ];
 }
 
-/** A tile as it is read out: place, what is done, what comes of it, what is wrong. */
-export function tileWords(tile: Tile, count: number): string {
-  const place = tile.place === 0 ? '' : `Step ${tile.place} of ${count - 1}: `;
-  const outcome = tile.state ? `${tile.size}, ${tile.content}` : (tile.refusal ?? 'not computed');
-  const warnings =
-    tile.warnings === 0 ? '' : `; ${tile.warnings} ${tile.warnings === 1 ? 'warning' : 'warnings'}`;
-  return `${place}${tile.isOff ? 'switched off, ' : ''}${tile.instruction}. ${outcome}${warnings}`;
-}
-
 function sizeWords({ bar }: ForgedState, format: Format): string {
   return format.size([bar.lengthMm, bar.widthMm, bar.thicknessMm]);
 }

@@ -24,9 +24,9 @@ export class JourneyHarness extends ComponentHarness {
     return this.texts('.tile .none');
   }
 
-  /** Tiles as they are read out. */
-  async getLabels(): Promise<(string | null)[]> {
-    return Promise.all((await this.tiles()).map((tile) => tile.getAttribute('aria-label')));
+  /** What each computed tile says of layers and mass. */
+  async getContents(): Promise<string[]> {
+    return this.texts('.tile .content');
   }
 
   async getBars(): Promise<string[]> {
