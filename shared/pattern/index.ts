@@ -5,7 +5,8 @@ export { type Program, entryOps } from './program/program.js';
 export { referenceTracer } from './reference/tracer.js';
 export type { Engine, Tracer } from './tracer.js';
 export { edgeSteels, type EdgeShare } from './surfaces/edge.js';
-export { outlinePoints } from './surfaces/outline.js';
+export { type Blade, bladeOf } from './surfaces/blade.js';
+export { type Outline, outlinePoints } from './surfaces/outline.js';
 export {
   FACES,
   type Face,
