@@ -21,7 +21,7 @@ import { errorWords } from './field-errors';
     ReactiveFormsModule,
   ],
   template: `
-    <mat-form-field appearance="outline">
+    <mat-form-field appearance="outline" subscriptSizing="dynamic">
       <mat-label>Password</mat-label>
       <input
         matInput

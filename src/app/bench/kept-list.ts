@@ -27,6 +27,7 @@ import { Moment } from './moment';
     }
   `,
   styleUrl: './kept-list.scss',
+  host: { '[hidden]': 'kept.designs().length === 0' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class KeptList {

@@ -26,7 +26,7 @@ import { StarterGallery } from './starter-gallery';
   `,
   styles: `
     mat-dialog-content {
-      max-height: 78dvh;
+      max-height: 68dvh;
     }
     p {
       padding-bottom: 16px;
