@@ -34,12 +34,14 @@ export interface View {
   readonly theme: 'light' | 'dark';
   /** A finger instead of a mouse. */
   readonly touch: boolean;
+  /** Decides on millimetres or inches until the visitor chooses. */
+  readonly locale: string;
 }
 
 /** The widths at which every page has to work. */
-export const desk: View = { width: 1440, height: 900, theme: 'light', touch: false };
-export const tablet: View = { width: 820, height: 1180, theme: 'light', touch: true };
-export const phone: View = { width: 390, height: 844, theme: 'light', touch: true };
+export const desk: View = { width: 1440, height: 900, theme: 'light', touch: false, locale: 'en-GB' };
+export const tablet: View = { ...desk, width: 820, height: 1180, touch: true };
+export const phone: View = { ...desk, width: 390, height: 844, touch: true };
 
 /** One person in a browser of their own: no cookies, nothing stored. What goes wrong in the page is noted. */
 export class Visitor {
@@ -53,14 +55,14 @@ export class Visitor {
 
   /** Opens a context on `baseUrl`. */
   static async open(browser: Browser, baseUrl: string, view: Partial<View> = {}): Promise<Visitor> {
-    const { width, height, theme, touch } = { ...desk, ...view };
+    const { width, height, theme, touch, locale } = { ...desk, ...view };
     const options: BrowserContextOptions = {
       baseURL: baseUrl,
       viewport: { width, height },
       colorScheme: theme,
       hasTouch: touch,
       reducedMotion: 'reduce',
-      locale: 'en-US',
+      locale,
       timezoneId: 'UTC',
     };
     const context = await browser.newContext(options);
