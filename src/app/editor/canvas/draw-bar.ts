@@ -2,7 +2,8 @@ import type { BarState } from '@shared/bar';
 import type { Format } from '@shared/units';
 import { type BarScene, type LaidPiece, boxPx } from './bar-scene';
 import { lieText, overhangTexts, sticksOut } from './bar-text';
-import { FIGURE_FONT, drawDimension, haloed } from './draw-dimension';
+import { drawDimension } from './draw-dimension';
+import { amount, drawPieces, outline, seam, trimmed } from './draw-pieces';
 import { type BarView, drawBarView } from './draw-bar-view';
 import type { SteelInk } from './draw-layers';
 import type { HatchTiles } from './hatch-tiles';
@@ -72,7 +73,7 @@ function drawSide(context: CanvasRenderingContext2D, pixelRatio: number, picture
     const end = boxPx(scene.side, bar.lengthMm + furthestMm, 0, 0, bar.thicknessMm);
     amount(
       context,
-      picture,
+      paper,
       `+${written(format, furthestMm)}`,
       end.leftPx + 6,
       whole.topPx + whole.heightPx / 2,
@@ -82,46 +83,15 @@ function drawSide(context: CanvasRenderingContext2D, pixelRatio: number, picture
 }
 
 function drawEnd(context: CanvasRenderingContext2D, pixelRatio: number, picture: BarPicture): void {
-  const { bar, scene, laid, along, paper, format } = picture;
+  const { bar, scene, laid, format } = picture;
   const whole = boxPx(scene.end, 0, 0, bar.widthMm, bar.thicknessMm);
-  let lowestPx = whole.topPx + whole.heightPx;
-  if (laid.length === 0) view(context, pixelRatio, picture, bar, 'end', whole);
-  for (const piece of laid) {
-    const { widthMm, thicknessMm } = piece.bar;
-    const box = boxPx(scene.end, piece.acrossMm, piece.upMm, widthMm, thicknessMm);
-    view(context, pixelRatio, picture, piece.bar, 'end', box);
-    lowestPx = Math.max(lowestPx, box.topPx + box.heightPx);
-    if (!sticksOut(piece.overhang.acrossMm)) continue;
-    const sideMm = piece.overhang.acrossMm / 2;
-    const strips =
-      along === 'thickness'
-        ? [
-            boxPx(scene.end, piece.acrossMm, piece.upMm, sideMm, thicknessMm),
-            boxPx(scene.end, bar.widthMm, piece.upMm, sideMm, thicknessMm),
-          ]
-        : [
-            boxPx(scene.end, piece.acrossMm, piece.upMm, widthMm, sideMm),
-            boxPx(scene.end, piece.acrossMm, bar.thicknessMm, widthMm, sideMm),
-          ];
-    for (const strip of strips) trimmed(context, paper, strip);
-    const last = strips[1] as AreaPx;
-    const figure = `+${written(format, sideMm)}`;
-    if (along === 'thickness') {
-      amount(context, picture, figure, last.leftPx + last.widthPx + 6, last.topPx + last.heightPx / 2);
-    } else {
-      const middlePx = last.leftPx + last.widthPx / 2 - measureText(figure, FIGURE_FONT) / 2;
-      amount(context, picture, figure, middlePx, last.topPx - 9);
-    }
-  }
-  for (const piece of laid.slice(1)) {
-    const edge =
-      along === 'thickness'
-        ? boxPx(scene.end, 0, piece.upMm, bar.widthMm, 0)
-        : boxPx(scene.end, piece.acrossMm, 0, 0, bar.thicknessMm);
-    seam(context, paper, edge);
-  }
-  outline(context, paper, whole);
-  dimensions(context, picture, whole, lowestPx, written(format, bar.widthMm));
+  if (laid.length === 0) {
+    view(context, pixelRatio, picture, bar, 'end', whole);
+    outline(context, picture.paper, whole);
+  } else drawPieces(context, pixelRatio, { ...picture, viewport: scene.end });
+  const lowestMm = Math.min(0, ...laid.map((piece) => piece.upMm));
+  const lowest = boxPx(scene.end, 0, lowestMm, 0, 0);
+  dimensions(context, picture, whole, lowest.topPx, written(format, bar.widthMm));
 }
 
 /** Width below and thickness at the left of a view. */
@@ -213,63 +183,6 @@ function view(
   box: AreaPx,
 ): void {
   drawBarView(context, pixelRatio, bar, from, box, picture.inks, picture.tiles, picture.paper);
-}
-
-function outline(context: CanvasRenderingContext2D, paper: Paper, box: AreaPx): void {
-  context.strokeStyle = paper.colours.ink;
-  context.lineWidth = 1.5;
-  context.strokeRect(
-    Math.round(box.leftPx) - 0.25,
-    Math.round(box.topPx) - 0.25,
-    Math.round(box.widthPx) + 0.5,
-    Math.round(box.heightPx) + 0.5,
-  );
-}
-
-/** A seam between two pieces: a box without height, or without width. */
-function seam(context: CanvasRenderingContext2D, paper: Paper, box: AreaPx): void {
-  for (const [colour, width] of [
-    [paper.colours.ground, 3],
-    [paper.colours.ink, 1.25],
-  ] as const) {
-    context.strokeStyle = colour;
-    context.lineWidth = width;
-    context.beginPath();
-    context.moveTo(box.leftPx, box.topPx + box.heightPx);
-    context.lineTo(box.leftPx + box.widthPx, box.topPx);
-    context.stroke();
-  }
-}
-
-/** What is trimmed: pale, with a broken outline. */
-function trimmed(context: CanvasRenderingContext2D, paper: Paper, box: AreaPx): void {
-  context.fillStyle = paper.colours.ground;
-  context.globalAlpha = 0.78;
-  context.fillRect(box.leftPx, box.topPx, box.widthPx, box.heightPx);
-  context.globalAlpha = 1;
-  context.strokeStyle = paper.colours.straw;
-  context.lineWidth = 1;
-  context.setLineDash([5, 3]);
-  context.strokeRect(
-    Math.floor(box.leftPx) + 0.5,
-    Math.floor(box.topPx) + 0.5,
-    Math.round(box.widthPx),
-    Math.round(box.heightPx),
-  );
-  context.setLineDash([]);
-}
-
-function amount(
-  context: CanvasRenderingContext2D,
-  picture: BarPicture,
-  figure: string,
-  leftPx: number,
-  middlePx: number,
-): void {
-  context.font = FIGURE_FONT;
-  context.textAlign = 'left';
-  context.textBaseline = 'middle';
-  haloed(context, figure, leftPx, middlePx, picture.paper.colours.straw, picture.paper.colours.ground);
 }
 
 function written(format: Format, mm: number): string {

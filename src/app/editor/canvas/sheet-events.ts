@@ -6,8 +6,9 @@ export interface SheetHandlers {
   readonly input: (input: ToolInput) => void;
   /** A pointer passes over without being down; null: it left. */
   readonly hover: (at: PointPx | null, device: PointerDevice) => void;
-  readonly zoom: (at: PointPx, factor: number) => void;
-  readonly push: (byXPx: number, byYPx: number) => void;
+  /** The wheel, and a pinch on a touchpad; without it they scroll the page. */
+  readonly zoom?: (at: PointPx, factor: number) => void;
+  readonly push?: (byXPx: number, byYPx: number) => void;
   /** @returns whether the key was used */
   readonly key: (event: KeyboardEvent) => boolean;
   /** Whether a pointer is at work. */
@@ -77,11 +78,14 @@ export function listenOn(element: HTMLElement, handlers: SheetHandlers, signal: 
       if (handlers.holdsTouch() && event.cancelable) event.preventDefault();
     });
   }
-  on('wheel', (event) => {
-    event.preventDefault();
-    if (event.shiftKey && !event.ctrlKey) handlers.push(-(event.deltaX || event.deltaY), 0);
-    else handlers.zoom(pointOn(element, event), wheelFactor(event));
-  });
+  const { zoom, push } = handlers;
+  if (zoom && push) {
+    on('wheel', (event) => {
+      event.preventDefault();
+      if (event.shiftKey && !event.ctrlKey) push(-(event.deltaX || event.deltaY), 0);
+      else zoom(pointOn(element, event), wheelFactor(event));
+    });
+  }
   on('keydown', (event) => {
     if (!handlers.isBusy() && handlers.key(event)) event.preventDefault();
   });
