@@ -127,17 +127,17 @@ export class ComputeClient {
     this.keys.set(design, key);
     if (known !== undefined) return key;
     this.send({ kind: 'design', payload: { key, design } });
-    const [oldest] = this.keys.keys();
+    const [oldest] = this.keys;
     if (this.keys.size > MOST_DESIGNS && oldest) {
-      const gone = this.keys.get(oldest) as number;
-      this.keys.delete(oldest);
-      this.send({ kind: 'forget', payload: { key: gone } });
+      const [gone, goneKey] = oldest;
+      this.keys.delete(gone);
+      this.send({ kind: 'forget', payload: { key: goneKey } });
     }
     return key;
   }
 
   private send(request: Unnumbered, requestId = ++this.lastId): number {
-    this.portNow().send({ ...request, requestId } as Request);
+    this.portNow().send({ ...request, requestId });
     return requestId;
   }
 

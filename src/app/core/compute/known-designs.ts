@@ -7,7 +7,6 @@ import {
   type Tracer,
   compile,
   kernelOf,
-  kernelTracer,
   referenceTracer,
   tracerFor,
 } from '@shared/pattern';

@@ -59,7 +59,7 @@ export function probeAt(
     place,
     layersInStack: layersOf(program.layerPlace, layer - place),
     bandMm: isSqueezed ? null : bandMm,
-    showsMm: bandMm && slope && shownMm(tracer, surface, blank, [across, up], bandMm, slope),
+    showsMm: bandMm && shownMm(tracer, surface, blank, [across, up], bandMm, slope),
   };
 }
 
@@ -89,7 +89,7 @@ function traced(tracer: Tracer, [x, y, z]: Vector): { readonly layer: number; re
   tracer.y[0] = y;
   tracer.z[0] = z;
   tracer.run(1);
-  return { layer: tracer.layer[0] as number, z: tracer.z[0] as number };
+  return { layer: tracer.layer[0] as number, z: tracer.z[0] };
 }
 
 /** How the height in the stack grows in the bar: its gradient. Null where every neighbour is of another layer. */
