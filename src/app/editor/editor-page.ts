@@ -133,7 +133,7 @@ export class EditorPage {
   }
 
   protected showShortcuts(): void {
-    this.dialog.open(ShortcutsDialog, { maxWidth: 'min(860px, 96vw)' });
+    this.dialog.open(ShortcutsDialog, { width: '860px', maxWidth: '96vw', autoFocus: 'dialog' });
   }
 
   protected key(event: KeyboardEvent): void {

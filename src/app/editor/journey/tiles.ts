@@ -1,3 +1,4 @@
+import { massKg } from '@shared/bar';
 import { WARNING_SEVERITIES, type Warning, type WarningSeverity } from '@shared/checks';
 import type { Bar } from '@shared/design';
 import type { ForgedBar, ForgedState, StepRefusal } from '@shared/forging';
@@ -45,8 +46,7 @@ export function tilesOf(
       stepId,
       place,
       state,
-      size: state ? sizeWords(state, format) : '',
-      content: state ? contentWords(state, format) : '',
+      ...(state ? stateWords(state, format) : { size: '', content: '' }),
       refusal: isRefused ? refusalWords(refusal) : null,
       severity:
         WARNING_SEVERITIES.find((severity) => own.some((warning) => warning.severity === severity)) ?? null,
@@ -70,14 +70,21 @@ export function tilesOf(
   ];
 }
 
-function sizeWords({ bar }: ForgedState, format: Format): string {
-  return format.size([bar.lengthMm, bar.widthMm, bar.thicknessMm]);
-}
+/** Words of states that an edit left alone are not made again. */
+const wordsMade = new WeakMap<ForgedState, { format: Format; size: string; content: string }>();
 
-function contentWords({ bar }: ForgedState, format: Format): string {
-  const volumeMm3 = bar.lengthMm * bar.widthMm * bar.thicknessMm;
-  const layers = `${format.count(bar.layers)} ${bar.layers === 1 ? 'layer' : 'layers'}`;
-  return `${layers}, ${format.mass(volumeMm3 * bar.densityKgM3 * 1e-9)}`;
+function stateWords(state: ForgedState, format: Format): Pick<Tile, 'size' | 'content'> {
+  const made = wordsMade.get(state);
+  if (made?.format === format) return made;
+  const { lengthMm, widthMm, thicknessMm, densityKgM3, layers } = state.bar;
+  const mass = format.mass(massKg(lengthMm * widthMm * thicknessMm, densityKgM3));
+  const words = {
+    format,
+    size: format.size([lengthMm, widthMm, thicknessMm]),
+    content: `${format.count(layers)} ${layers === 1 ? 'layer' : 'layers'}, ${mass}`,
+  };
+  wordsMade.set(state, words);
+  return words;
 }
 
 function startWords(bar: Bar, format: Format): string {

@@ -81,7 +81,14 @@ describe('DesignKeeper', () => {
     design: stored(store.design(), revision),
   });
   const written = async (key = 'd1'): Promise<Draft | undefined> => {
-    await TestBed.inject(DraftWriter).idle();
+    const idle = { yet: false };
+    void TestBed.inject(DraftWriter)
+      .idle()
+      .then(() => (idle.yet = true));
+    for (let i = 0; i < 100 && !idle.yet; i++) {
+      jasmine.clock().tick(50);
+      for (let turn = 0; turn < 30; turn++) await Promise.resolve();
+    }
     return shelf.get(key);
   };
 

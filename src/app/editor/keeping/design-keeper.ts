@@ -98,7 +98,9 @@ export class DesignKeeper {
     fromEvent(document, 'visibilitychange')
       .pipe(takeUntilDestroyed())
       .subscribe(() => {
-        if (document.visibilityState === 'hidden') this.saveNow.next();
+        if (document.visibilityState !== 'hidden') return;
+        this.writer.hurry();
+        this.saveNow.next();
       });
     inject(DestroyRef).onDestroy(() => {
       // A save under way is let finish; what is left is started.

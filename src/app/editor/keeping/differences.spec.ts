@@ -44,11 +44,11 @@ describe('differencesOf', () => {
 
   it('counts layers and tells their thickness', () => {
     const more = insertLayers(STRAIGHT, 'billet', 13, [{ steel: '15n20', thicknessMm: 1 }]);
-    const start = at(more, 'Start of “Billet”');
+    const start = at(more, 'Stack of “Billet”');
     expect(start?.mine).toContain('13 layers');
     expect(start?.theirs).toContain('14 layers');
     const thicker = setThickness(STRAIGHT, 'billet', new Set([0]), 4);
-    expect(at(thicker, 'Start of “Billet”')?.theirs).toContain('4 mm');
+    expect(at(thicker, 'Layers of “Billet”')?.theirs).toContain('4 mm');
   });
 
   it('compares name, blank and bars', () => {

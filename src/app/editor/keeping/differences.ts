@@ -52,7 +52,16 @@ function compareBars(mine: Design, theirs: Design, format: Format, compare: Comp
       continue;
     }
     compare(`Name of “${name}”`, a.name, b.name);
-    compare(`Start of “${name}”`, startWords(a, mine, format), startWords(b, theirs, format));
+    if (a.start.kind === 'stack' && b.start.kind === 'stack') {
+      compare(`Stack of “${name}”`, stackSize(a.start, format), stackSize(b.start, format));
+      compare(
+        `Layers of “${name}”`,
+        layersWords(a.start, mine, format),
+        layersWords(b.start, theirs, format),
+      );
+    } else {
+      compare(`Start of “${name}”`, startWords(a, mine, format), startWords(b, theirs, format));
+    }
     compareSteps(a, b, name, format, compare);
   }
 }
@@ -89,13 +98,14 @@ function stepWords(bar: Bar, id: string, format: Format): string {
   return kindOf(step).words.instruction(step, format) + heats + minutes + heat + note + off;
 }
 
+function stackSize(stack: Stack, format: Format): string {
+  const heightMm = stack.layers.reduce((sum, layer) => sum + layer.thicknessMm, 0);
+  return `${format.size([stack.lengthMm, stack.widthMm, heightMm])}, ${stack.layers.length} layers`;
+}
+
 function startWords(bar: Bar, design: Design, format: Format): string {
   const { start } = bar;
-  if (start.kind === 'stack') {
-    const heightMm = start.layers.reduce((sum, layer) => sum + layer.thicknessMm, 0);
-    const size = format.size([start.lengthMm, start.widthMm, heightMm]);
-    return `${start.layers.length} layers, ${size}: ${layersWords(start, design, format)}`;
-  }
+  if (start.kind === 'stack') return `${stackSize(start, format)}: ${layersWords(start, design, format)}`;
   const pieces = start.pieces.map((piece) => {
     const turned = piece.quarterTurns ? `, turned ${piece.quarterTurns}/4` : '';
     const end = piece.endForEnd ? ', end for end' : '';

@@ -59,6 +59,7 @@ export class Trouble {
     const dialog = this.dialog.open<ConflictDialog, Conflict, ConflictAnswer>(ConflictDialog, {
       data,
       maxWidth: 'min(900px, 96vw)',
+      autoFocus: 'dialog',
     });
     switch (await firstValueFrom(dialog.afterClosed(), { defaultValue: undefined })) {
       case 'mine':

@@ -1,4 +1,4 @@
-import { ComponentHarness, type HarnessLoader, type TestElement, TestKey } from '@angular/cdk/testing';
+import { ComponentHarness, type HarnessLoader, type TestElement, type TestKey } from '@angular/cdk/testing';
 import { MatMenuHarness } from '@angular/material/menu/testing';
 
 /** Drives a `lw-journey` as its users do: by its tiles, its seams, its buttons and by keys. */
