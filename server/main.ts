@@ -1,10 +1,9 @@
-import { pino } from 'pino';
 import { ConfigError, configFrom } from './config.js';
 import { NewerDatabaseError } from './db/open-database.js';
 import { FolderInUseError } from './db/process-lock.js';
 import { DamagedDatabaseError } from './db/snapshot-store.js';
 import { errorCode } from './db/file-system.js';
-import { REDACTED_PATHS } from './http/request-log.js';
+import { createLog } from './log.js';
 import { type RunningServer, startServer } from './start-server.js';
 
 /** After this the process ends whatever is still under way, ms. */
@@ -19,7 +18,7 @@ try {
 
 async function run(): Promise<void> {
   const config = configFrom(process.env);
-  const log = pino({ level: config.logLevel, redact: REDACTED_PATHS });
+  const log = createLog(config.logLevel);
   const server = await startServer(config, log, (error) => {
     log.fatal(
       { err: error },

@@ -114,7 +114,7 @@ describe('openDatabase', () => {
         await failNth(call, nth, code);
       }
     }
-  }, 60_000);
+  });
 
   it('holds out while every call fails, and works again when the disk does', async () => {
     let isBroken = false;

@@ -65,7 +65,7 @@ describe('SnapshotStore', () => {
         .toEqual([name]);
       expect(Buffer.compare(loaded.image!, previous)).withContext(`${kind}, ${n}`).toBe(0);
     }
-  }, 60_000);
+  });
 
   it('sets a damaged generation aside for rescue and never uses its number again', async () => {
     await generations(store(), 2);

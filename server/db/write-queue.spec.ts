@@ -49,7 +49,7 @@ describe('WriteQueue', () => {
       const rows = await queue.read((manager) => manager.countBy(Shop, { id: Like(`${seed}-%`) }));
       expect([acknowledged, rows]).withContext(`seed ${seed}`).toEqual([400, 400]);
     }
-  }, 60_000);
+  });
 
   it('shows a reader no row that was not committed', async () => {
     const reads: Promise<string[]>[] = [];

@@ -76,9 +76,25 @@ describe('every error', () => {
     const token = await member.newToken();
     await member.send('POST', '/api/designs', { document: aDesign() });
 
+    site.routes.router.get('/api/broken', async () => {
+      await site.queue.write((manager) =>
+        manager.query('INSERT INTO nowhere VALUES (?)', ['$argon2id$v=19']),
+      );
+    });
+    await member.get('/api/broken?q=sought');
+
     const log = site.log.join('');
     expect(log).toContain('/api/auth/register');
-    for (const secret of [PASSWORD, 'a wrong password', token, 'layerwright.session=', 's%3A', 'argon2']) {
+    expect(log).toContain('no such table: nowhere');
+    for (const secret of [
+      PASSWORD,
+      'a wrong password',
+      token,
+      'layerwright.session=',
+      's%3A',
+      'argon2',
+      'sought',
+    ]) {
       expect(log).withContext(secret).not.toContain(secret);
     }
   });

@@ -4,20 +4,6 @@ import type { RequestHandler } from 'express';
 import type { Logger } from 'pino';
 import { pinoHttp } from 'pino-http';
 
-/** What must not get into a log, whichever object it comes with. */
-export const REDACTED_PATHS = [
-  'password',
-  '*.password',
-  '*.passwordHash',
-  '*.secret',
-  '*.token',
-  'req.headers',
-  'res.headers',
-  'err.config',
-  'err.parameters',
-  'err.query',
-];
-
 /** Gives each request its number, says it in the answer, and logs one line when it has been answered. */
 export function requestLog(log: Logger): RequestHandler {
   return pinoHttp({

@@ -1,10 +1,10 @@
 import { randomBytes } from 'node:crypto';
 import { type Server, createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
-import { pino } from 'pino';
 import request, { type Response } from 'supertest';
 import { type Composition, type Materials, compose } from '../composition.js';
 import { type Compute, TASKS } from '../compute/tasks.js';
+import { createLog } from '../log.js';
 import type { Method } from '../auth/policy.js';
 import type { WriteQueue, WriteQueueOptions } from '../db/write-queue.js';
 import { memoryQueue } from './memory-database.js';
@@ -36,7 +36,7 @@ export async function testSite(
   const queue = await memoryQueue(queueOptions);
   const log: string[] = [];
   const composition = compose({
-    log: pino({ level: 'debug' }, { write: (line: string) => log.push(line) }),
+    log: createLog('debug', { write: (line: string) => log.push(line) }),
     units: queue,
     canStore: () => queue.isHealthy,
     compute: directCompute,

@@ -12,11 +12,11 @@ describe('a process killed while it writes', () => {
     expect(report.unusable).toBe(0);
     // Otherwise nothing was put to the test.
     expect(report.acknowledged).toBeGreaterThan(1000);
-  }, 180_000);
+  }, 600_000);
 
   it("loses writes with the driver's own saving, so that the test above is not blind", async () => {
     const report = await crashDriver({ kills: 10, folder: await temporaryFolder() });
 
     expect(report.lost + report.unusable).toBeGreaterThan(0);
-  }, 180_000);
+  }, 600_000);
 });

@@ -8,6 +8,7 @@ import { EmbeddedDatabase } from '../embedded-database.js';
 import { Design } from '../entities/index.js';
 import { openDatabase } from '../open-database.js';
 import { verifyImage } from '../verify-image.js';
+import { compileChild } from './compiled-child.js';
 import type { Order } from './order.js';
 import { Victim } from './victim.js';
 
@@ -79,16 +80,18 @@ async function crash(
 ): Promise<CrashReport> {
   let report = NOTHING;
   // Loading the modules takes longer than a run, so the next process loads them meanwhile.
-  let next = new Victim();
+  const child = await compileChild();
+  let next = new Victim(child.script);
   try {
     while (report.kills < plan.kills && !plan.isEnough(report)) {
       const victim = next;
-      next = new Victim();
+      next = new Victim(child.script);
       report = await assessed(report, await killOnce(victim, `run${report.kills}`));
       plan.onKill?.(report);
     }
   } finally {
     next.kill();
+    await child.remove();
   }
   return report;
 }

@@ -1,6 +1,5 @@
 import { type ChildProcessByStdio, spawn } from 'node:child_process';
 import type { Readable, Writable } from 'node:stream';
-import { fileURLToPath } from 'node:url';
 import type { Order } from './order.js';
 
 /** A process that will be killed, with its modules already loaded. */
@@ -10,12 +9,8 @@ export class Victim {
   #output = '';
   #onOutput: () => void = () => undefined;
 
-  constructor() {
-    const script = fileURLToPath(import.meta.resolve('./child.ts'));
-    this.#process = spawn(process.execPath, ['--import', import.meta.resolve('tsx'), script], {
-      stdio: ['pipe', 'pipe', 'inherit'],
-      env: { ...process.env, TSX_TSCONFIG_PATH: fileURLToPath(import.meta.resolve('../../tsconfig.json')) },
-    });
+  constructor(script: string) {
+    this.#process = spawn(process.execPath, [script], { stdio: ['pipe', 'pipe', 'inherit'] });
     this.#process.stdin.on('error', () => undefined);
     this.#process.stdout.setEncoding('utf8').on('data', (text: string) => {
       this.#output += text;
