@@ -68,10 +68,17 @@ export class Opening {
     this.again();
   }
 
-  /** A visitor begins with the plainest starter. */
+  /** A visitor begins with the stack of the plainest starter, and plans its steps. */
   async begin(): Promise<void> {
     const [plainest] = STARTERS;
-    if (plainest) await this.visitorDrafts.start(plainest.design);
+    if (plainest) {
+      const { bars, blank: _, note: __, ...rest } = plainest.design;
+      await this.visitorDrafts.start({
+        ...rest,
+        name: 'New billet',
+        bars: bars.map((bar) => ({ ...bar, steps: [] })),
+      });
+    }
     this.again();
   }
 
