@@ -22,7 +22,7 @@ async function run(): Promise<void> {
   const server = await startServer(config, log, (error) => {
     log.fatal(
       { err: error },
-      'Memory could not go back to what is on disk: ending, to start from the disk again',
+      'The database cannot go on: ending, so that the next start takes what is on disk',
     );
     process.exit(1);
   });

@@ -1,4 +1,4 @@
-import { readdir, writeFile } from 'node:fs/promises';
+import { readdir, unlink, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { pino } from 'pino';
 import type { MigrationInterface, QueryRunner } from 'typeorm';
@@ -6,7 +6,7 @@ import { Design } from './entities/index.js';
 import { type FileSystem, diskFileSystem } from './file-system.js';
 import { MIGRATIONS } from './migrations/index.js';
 import { NewerDatabaseError, type OpenOptions, type OpenedDatabase, openDatabase } from './open-database.js';
-import { FolderInUseError } from './process-lock.js';
+import { FolderInUseError, FolderTakenError } from './process-lock.js';
 import type { Units } from './units.js';
 import {
   FAULTY_CALLS,
@@ -48,6 +48,22 @@ describe('openDatabase', () => {
     await expectAsync(open()).toBeRejectedWithError(FolderInUseError);
     await first.close();
     await (await open()).close();
+  });
+
+  it('stops at once when another process has taken the folder, and disturbs nothing there', async () => {
+    const broken: unknown[] = [];
+    const first = await open({ onBroken: (error) => broken.push(error) });
+    await first.units.write((manager) => addOwner(manager));
+    await unlink(join(folder, 'layerwright.lock'));
+    const second = await open();
+    const before = await snapshots();
+
+    await expectAsync(write(first.units, 'late')).toBeRejected();
+
+    expect(broken).toEqual([jasmine.any(FolderTakenError)]);
+    expect(await snapshots()).toEqual(before);
+    await second.close();
+    await first.close();
   });
 
   it('says loudly that it fell back to an older snapshot', async () => {

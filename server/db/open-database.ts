@@ -3,7 +3,7 @@ import type { Logger } from 'pino';
 import { EmbeddedDatabase, type MigrationClass } from './embedded-database.js';
 import { type FileSystem, diskFileSystem, writeSynced } from './file-system.js';
 import { MIGRATIONS } from './migrations/index.js';
-import { ProcessLock } from './process-lock.js';
+import { FolderTakenError, ProcessLock } from './process-lock.js';
 import { SnapshotStore } from './snapshot-store.js';
 import type { Units } from './units.js';
 import { verifyImage } from './verify-image.js';
@@ -27,6 +27,7 @@ export interface OpenOptions {
   readonly files?: FileSystem;
   readonly migrations?: readonly MigrationClass[];
   readonly retryMs?: number;
+  /** The database cannot go on: the folder was taken by another process, or memory cannot go back to what is on disk. */
   readonly onBroken?: (error: unknown) => void;
 }
 
@@ -66,13 +67,18 @@ export async function openDatabase(options: OpenOptions): Promise<OpenedDatabase
       );
     }
     const { database, image } = await migrated(loaded.image, loaded.generation, store, options);
+    const report = sparing((error: unknown) =>
+      log.error({ err: error }, 'The database could not be written: changes are refused until it can'),
+    );
     const queue = new WriteQueue(database, {
       save: (bytes) => store.save(bytes),
       durableImage: image,
       ...(options.retryMs === undefined ? {} : { retryMs: options.retryMs }),
       ...(options.onBroken ? { onBroken: options.onBroken } : {}),
-      onFailure: (error) =>
-        log.error({ err: error }, 'The database could not be written: changes are refused for now'),
+      onFailure: (error) => {
+        if (error instanceof FolderTakenError) options.onBroken?.(error);
+        else report(error);
+      },
       onRecovery: () => log.info('The database can be written again'),
     });
     return {
@@ -89,6 +95,17 @@ export async function openDatabase(options: OpenOptions): Promise<OpenedDatabase
     await lock.release();
     throw error;
   }
+}
+
+/** Calls `tell` at most once a minute: a full disk stays full for a while, and every attempt to write says so. */
+function sparing(tell: (error: unknown) => void): (error: unknown) => void {
+  let nextMs = 0;
+  return (error) => {
+    const nowMs = performance.now();
+    if (nowMs < nextMs) return;
+    nextMs = nowMs + 60_000;
+    tell(error);
+  };
 }
 
 /** The database brought up to date, and its image as it is on disk. */

@@ -37,6 +37,15 @@ export class FolderInUseError extends Error {
   }
 }
 
+/** Another process has taken the folder from this one, which must not write to it any more. */
+export class FolderTakenError extends Error {
+  override readonly name = 'FolderTakenError';
+
+  constructor(path: string) {
+    super(`The lock ${path} is no longer held by this process.`);
+  }
+}
+
 /** Keeps a second process out of the data folder. Left behind by a crash, it is taken over. */
 export class ProcessLock {
   readonly #path: string;
@@ -77,11 +86,10 @@ export class ProcessLock {
     throw new FolderInUseError(folder, null);
   }
 
-  /** Throws when the folder has been taken from this process. */
+  /** Throws {@link FolderTakenError} when the folder has been taken from this process. */
   async check(): Promise<void> {
     const holder = await readHolder(this.#path);
-    if (holder?.token !== this.token)
-      throw new Error(`The lock ${this.#path} is no longer held by this process.`);
+    if (holder?.token !== this.token) throw new FolderTakenError(this.#path);
   }
 
   async release(): Promise<void> {
