@@ -12,6 +12,7 @@ import {
   setLimit,
   setNote,
   setResult,
+  setUnevenness,
 } from './document-edits';
 import { STRAIGHT, starter } from './testing/designs';
 
@@ -70,6 +71,7 @@ describe('edits of the document', () => {
     const back = setAllowance(own, 'kerfMm', undefined);
     expect('allowances' in back).toBeFalse();
     expect(setLimit(setLimit(STRAIGHT, 'pressOpeningMm', 80), 'pressOpeningMm', undefined)).toEqual(STRAIGHT);
+    expect(setUnevenness(setUnevenness(STRAIGHT, 0.3), 0)).toEqual(STRAIGHT);
     expect('note' in setNote(STRAIGHT, '')).toBeFalse();
   });
 

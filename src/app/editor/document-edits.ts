@@ -38,6 +38,13 @@ export function setLimit(design: Design, name: keyof ShopLimits, value: number |
   return next === undefined ? rest : { ...rest, limits: next };
 }
 
+/** How uneven the hammer leaves the layers, 0–1; an even bar needs no word. */
+export function setUnevenness(design: Design, unevenness: number): Design {
+  if ((design.unevenness ?? 0) === unevenness) return design;
+  const { unevenness: _, ...rest } = design;
+  return unevenness === 0 ? rest : { ...rest, unevenness };
+}
+
 /** Which way the pieces of an assembly are put together. */
 export function setAlong(design: Design, barId: string, along: Assembly['along']): Design {
   return withAssembly(design, barId, (assembly) =>

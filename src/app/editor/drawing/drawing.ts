@@ -1,12 +1,14 @@
-import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, linkedSignal } from '@angular/core';
 import { insertLayers, moveLayers, setThickness } from '@shared/design';
 import { kindOf } from '@shared/steps';
 import { UnitsStore } from '../../core/units/units-store';
+import { AssemblyCanvas } from '../canvas/assembly-canvas';
 import { BarCanvas } from '../canvas/bar-canvas';
 import type { AssemblyGesture, GestureEnd, StackGesture } from '../canvas/contract';
 import { StackCanvas } from '../canvas/stack-canvas';
 import { DesignStore } from '../design-store';
-import { editPiece, insertPiece, layerLike, movePiece, setAlong } from '../document-edits';
+import { editPiece, insertPiece, layerLike, movePiece, setAlong, setUnevenness } from '../document-edits';
+import { PatternView } from '../pattern/pattern-view';
 import { placesAfterMove } from '../twin/layer-work';
 import { stockThicknessesMm } from './stock-thicknesses';
 
@@ -16,7 +18,7 @@ import { stockThicknessesMm } from './stock-thicknesses';
  */
 @Component({
   selector: 'lw-drawing',
-  imports: [BarCanvas, StackCanvas],
+  imports: [AssemblyCanvas, BarCanvas, PatternView, StackCanvas],
   templateUrl: './drawing.html',
   styleUrl: './drawing.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -31,29 +33,41 @@ export class Drawing {
     return step === null && bar.start.kind === 'stack' ? bar.start : null;
   });
   /** The state to draw: what is selected, or the last one before a step that can't be done. */
-  protected readonly state = computed(() => {
-    const { forged, place } = this.store.selected();
-    return forged.states[Math.min(place, forged.states.length - 1)] ?? null;
-  });
-  protected readonly isBefore = computed(() => {
-    const { forged, place } = this.store.selected();
-    return place >= forged.states.length;
-  });
-  protected readonly stateName = computed(() => {
-    const step = this.state()?.step;
-    return step ? kindOf(step).words.name : 'the start';
+  protected readonly shown = computed(() => {
+    const { bar, forged, place } = this.store.selected();
+    const at = Math.min(place, forged.states.length - 1);
+    const state = forged.states[at];
+    if (state === undefined) return null;
+    const isEnd = forged.refusal === null && at === forged.states.length - 1;
+    return {
+      state,
+      moment: { bar: bar.id, state: at },
+      words: state.step ? `after ${kindOf(state.step).words.name}` : 'as it is put together',
+      isResult: isEnd && bar.id === this.store.design().result,
+      isBefore: place > at,
+    };
   });
   /** The assembly, while its start is selected. */
   protected readonly assembly = computed(() => {
     const { bar, step } = this.store.selected();
     return step === null && bar.start.kind === 'assembly' ? bar.start : null;
   });
+  protected readonly barNames = computed(
+    () => new Map(this.store.design().bars.map((bar) => [bar.id, bar.name])),
+  );
+  /** Place of the chosen piece; another bar has none yet. */
+  protected readonly piece = linkedSignal<string, number | null>({
+    source: () => this.store.selection().barId,
+    computation: () => null,
+  });
   protected readonly stockMm = computed(() => stockThicknessesMm(this.units.system()));
 
   private layersBefore: ReadonlySet<number> = new Set();
+  private pieceBefore: number | null = null;
 
   protected begin(): void {
     this.layersBefore = this.store.selection().layers;
+    this.pieceBefore = this.piece();
     this.store.beginGesture();
   }
 
@@ -82,6 +96,9 @@ export class Drawing {
 
   protected assemblyGesture(gesture: AssemblyGesture): void {
     const { barId } = this.store.selection();
+    if (gesture.kind === 'move') {
+      this.piece.set(gesture.to > gesture.place ? gesture.to - 1 : gesture.to);
+    } else if (gesture.kind === 'insert') this.piece.set(gesture.at);
     this.store.gesture((design) => {
       switch (gesture.kind) {
         case 'move':
@@ -100,6 +117,12 @@ export class Drawing {
 
   protected end(how: GestureEnd): void {
     this.store.endGesture(how);
-    if (how === 'abort') this.store.selectLayers(this.layersBefore);
+    if (how === 'settle') return;
+    if (this.stack() !== null) this.store.selectLayers(this.layersBefore);
+    this.piece.set(this.pieceBefore);
+  }
+
+  protected setUnevenness(unevenness: number): void {
+    this.store.edit((design) => setUnevenness(design, unevenness), 'unevenness');
   }
 }

@@ -7,6 +7,7 @@ import { type Bar, MAX_BARS, usersOf } from '@shared/design';
 import type { ForgedBar } from '@shared/forging';
 import { kindOf } from '@shared/steps';
 import { UnitsStore } from '../../core/units/units-store';
+import { BarsMapCanvas } from '../canvas/bars-map';
 import { DesignStore } from '../design-store';
 import { setResult } from '../document-edits';
 import { commonScale } from '../sketch/common-scale';
@@ -30,7 +31,15 @@ interface Strip {
 /** The journey: for each bar one strip that shows it to scale after every step, and what can be done with the steps. */
 @Component({
   selector: 'lw-journey',
-  imports: [BarStrip, MatButtonModule, MatIconModule, MatMenuModule, MatTooltipModule, StepChoice],
+  imports: [
+    BarStrip,
+    BarsMapCanvas,
+    MatButtonModule,
+    MatIconModule,
+    MatMenuModule,
+    MatTooltipModule,
+    StepChoice,
+  ],
   templateUrl: './journey.html',
   styleUrl: './journey.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -62,6 +71,7 @@ export class Journey {
     this.store.design().bars.filter((bar) => bar.id !== this.selected().bar.id),
   );
   protected readonly canAddBar = computed(() => this.store.design().bars.length < MAX_BARS);
+  protected readonly isMapShown = signal(false);
   protected readonly folded = signal<ReadonlySet<string>>(new Set());
 
   protected command(command: StepCommand): void {
@@ -107,6 +117,11 @@ export class Journey {
   protected copyFromHere(toBarId: string): void {
     const { bar, place } = this.selected();
     this.steps.copyTo(bar.id, place - 1, bar.steps.length, toBarId);
+  }
+
+  /** A bar on the map leads to its start. */
+  protected selectBar(barId: string | null): void {
+    if (barId !== null) this.store.select(barId, null);
   }
 
   protected toggleFold(barId: string): void {

@@ -21,6 +21,7 @@ import { DesignStore } from '../design-store';
 import { LayerGrid } from '../twin/layer-grid';
 import { LayerWork } from '../twin/layer-work';
 import { GroupForm } from './group-form';
+import { SteelShelf } from './steel-shelf';
 
 /** The form of a stack: its size, its layers as a grid, groups to lay, steels to swap, the ratio of dark to bright. */
 @Component({
@@ -35,6 +36,7 @@ import { GroupForm } from './group-form';
     MatTooltipModule,
     NumberField,
     SteelPicker,
+    SteelShelf,
   ],
   templateUrl: './stack-panel.html',
   styleUrls: ['./panel.scss', './stack-panel.scss'],
@@ -132,13 +134,9 @@ export class StackPanel {
     this.swapFromChosen.set(to);
   }
 
-  protected addLayer(): void {
-    const { layers } = this.stack();
+  /** Onto the uppermost of the selected layers, or onto the stack. */
+  protected layLayer(steel: string): void {
     const chosen = this.layers();
-    const at = chosen.size > 0 ? Math.max(...chosen) + 1 : layers.length;
-    // The steel that would come next in the alternation.
-    const below = layers[at - 1]?.steel;
-    const next = layers.find((layer) => layer.steel !== below)?.steel ?? below;
-    if (next !== undefined) this.work.insert(at, next);
+    this.work.insert(chosen.size > 0 ? Math.max(...chosen) + 1 : this.stack().layers.length, steel);
   }
 }
