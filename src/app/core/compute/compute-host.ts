@@ -1,5 +1,5 @@
-import { Picture, type PictureRequest, type Stage, paint } from '@shared/pattern';
-import { KnownDesigns } from './known-designs';
+import { Picture, type PictureRequest, paint } from '@shared/pattern';
+import { type KnownDesign, KnownDesigns } from './known-designs';
 import type { Answer, Failure, PicturePart, PictureTask, ProbeTask, Request } from './messages';
 import { type Probe, probeAt } from './probe';
 import { turnGrey } from './turn-grey';
@@ -18,8 +18,9 @@ const PORTION_OF_REFERENCE = 1_024;
 interface Job {
   readonly requestId: number;
   readonly task: PictureTask;
-  readonly picture: Picture;
-  readonly portion: number;
+  readonly known: KnownDesign;
+  /** Null until it is its turn. */
+  begun: { readonly picture: Picture; readonly portion: number } | null;
 }
 
 /** The pictures of a lane that a newer one may begin from. */
@@ -53,7 +54,7 @@ export class ComputeHost {
           this.designs.remove(request.payload.key);
           break;
         case 'picture':
-          this.begin(requestId, request.payload);
+          this.take(requestId, request.payload);
           break;
         case 'probe':
           this.means.post({ requestId, kind: 'probe', payload: this.probe(request.payload) }, []);
@@ -71,10 +72,21 @@ export class ComputeHost {
     }
   }
 
-  private begin(requestId: number, task: PictureTask): void {
-    this.jobs = this.jobs.filter((job) => job.task.lane !== task.lane);
-    const ready = this.designs.ready(task.design, task.at);
+  /** Takes a job on; what it costs to make ready waits for its turn. */
+  private take(requestId: number, task: PictureTask): void {
+    const known = this.designs.get(task.design);
+    this.jobs = [
+      ...this.jobs.filter((job) => job.task.lane !== task.lane),
+      { requestId, task, known, begun: null },
+    ];
+    this.go();
+  }
+
+  private begin(job: Job): void {
+    const { requestId, task, known } = job;
+    const ready = this.designs.ready(known, task.at);
     if (ready === null) {
+      this.drop(job);
       this.kept.delete(task.lane);
       this.fail(requestId, { code: 'no-state', message: '' });
       return;
@@ -86,17 +98,15 @@ export class ComputeHost {
     const kept = this.kept.get(task.lane);
     if (kept && isSameRequest(kept.last.request, asked)) {
       // Only the look is new: what was traced is shown in it at once, and goes on from there.
-      const job = { requestId, task, picture: kept.last, portion };
-      this.jobs = [...this.jobs, job];
-      if (kept.last.stage !== 'blocks') this.show(job, kept.last.stage);
-    } else {
-      const finished = kept?.finished ?? null;
-      const picture = new Picture(asked, tracer, finished, isKept);
-      // A picture that was stopped is let go of, and with it the one that it began from.
-      if (isKept) this.kept.set(task.lane, { last: picture, finished });
-      this.jobs = [...this.jobs, { requestId, task, picture, portion }];
+      job.begun = { picture: kept.last, portion };
+      if (kept.last.stage !== 'blocks') this.show(job, kept.last);
+      return;
     }
-    this.go();
+    const finished = kept?.finished ?? null;
+    const picture = new Picture(asked, tracer, finished, isKept);
+    // A picture that was stopped is let go of, and with it the one that it began from.
+    if (isKept) this.kept.set(task.lane, { last: picture, finished });
+    job.begun = { picture, portion };
   }
 
   private go(): void {
@@ -115,18 +125,24 @@ export class ComputeHost {
     if (!first) return;
     const job = others.reduce((best, other) => (other.task.rank < best.task.rank ? other : best), first);
     try {
-      const before = job.picture.stage;
-      const stage = job.picture.advance(job.portion);
-      if (stage !== before) this.show(job, stage);
+      if (job.begun === null) {
+        this.begin(job);
+        return;
+      }
+      const { picture, portion } = job.begun;
+      const before = picture.stage;
+      if (picture.advance(portion) !== before) this.show(job, picture);
     } catch (error) {
-      this.jobs = this.jobs.filter((other) => other !== job);
+      this.drop(job);
       this.fail(job.requestId, { code: 'broken', message: String(error) });
     }
   }
 
-  private show({ requestId, task, picture }: Job, stage: Stage): void {
+  private show(job: Job, picture: Picture): void {
+    const { requestId, task } = job;
+    const { stage, counters } = picture;
     if (stage === 'done') {
-      this.jobs = this.jobs.filter((job) => job.requestId !== requestId);
+      this.drop(job);
       if (task.isKept) this.kept.set(task.lane, { last: picture, finished: picture });
     }
     const { program, steels } = picture.request;
@@ -134,12 +150,16 @@ export class ComputeHost {
     const pixels = rgba as PicturePart['pixels'];
     if (task.isGrey) turnGrey(pixels);
     const { widthPx, heightPx } = task;
-    const payload: PicturePart = { stage, widthPx, heightPx, pixels, counters: picture.counters };
+    const payload: PicturePart = { stage, widthPx, heightPx, pixels, counters };
     this.means.post({ requestId, kind: 'picture', payload }, [pixels.buffer]);
   }
 
+  private drop(job: Job): void {
+    this.jobs = this.jobs.filter((other) => other !== job);
+  }
+
   private probe({ design, at, surface, across, up }: ProbeTask): Probe | null {
-    const ready = this.designs.ready(design, at);
+    const ready = this.designs.ready(this.designs.get(design), at);
     if (ready === null) return null;
     return probeAt(this.designs.exactTracer(ready), surface, ready.blank, across, up);
   }

@@ -22,42 +22,56 @@ export interface Ready {
   readonly tracer: Tracer;
 }
 
+/** A design that was given. Whoever holds it can have its states made ready even after it was forgotten. */
+export interface KnownDesign {
+  readonly design: Design;
+  /** Null: not worked out yet. */
+  forging: Forging | null;
+  /** By state and bar. */
+  readonly states: Map<string, Ready>;
+}
+
 /** States that are kept ready: each holds memory of the kernel. */
 const MOST_READY = 24;
 
 /** The designs that were given, worked out and compiled when first asked for, and kept so. */
 export class KnownDesigns {
-  private readonly designs = new Map<number, { readonly design: Design; forging: Forging | null }>();
-  /** By design, bar and state; the one asked for last comes last. */
-  private readonly states = new Map<string, Ready>();
+  private readonly designs = new Map<number, KnownDesign>();
+  /** What is ready; that asked for last comes last. */
+  private readonly used = new Map<Ready, () => void>();
   private readonly exact = new WeakMap<Program, Tracer>();
   /** Undefined: not made yet. Null: this host has none. */
   private kernel: Kernel | null | undefined;
-  /** Programs compiled so far. */
-  compiled = 0;
 
   add(key: number, design: Design): void {
-    this.designs.set(key, { design, forging: null });
+    this.designs.set(key, { design, forging: null, states: new Map() });
   }
 
   remove(key: number): void {
     this.designs.delete(key);
-    for (const state of [...this.states.keys()]) if (state.startsWith(`${key}/`)) this.states.delete(state);
   }
 
-  /**
-   * A state of a bar; the result as it is in the end when none is named. Null when a step before it is refused.
-   * @throws RangeError when the design was not given
-   */
-  ready(key: number, at?: Moment): Ready | null {
-    const name = `${key}/${at ? `${at.state}/${at.bar}` : ''}`;
-    const known = this.states.get(name);
-    this.states.delete(name);
-    const ready = known ?? this.prepared(key, at);
+  /** @throws RangeError when the design was not given */
+  get(key: number): KnownDesign {
+    const known = this.designs.get(key);
+    if (!known) throw new RangeError(`KnownDesigns.get: there is no design ${key}`);
+    return known;
+  }
+
+  /** A state of a bar; the result as it is in the end when none is named. Null when a step before it is refused. */
+  ready(known: KnownDesign, at?: Moment): Ready | null {
+    const name = at ? `${at.state}/${at.bar}` : '';
+    const ready = known.states.get(name) ?? this.prepared(known, at);
     if (ready === null) return null;
-    this.states.set(name, ready);
-    const [oldest] = this.states.keys();
-    if (this.states.size > MOST_READY && oldest !== undefined) this.states.delete(oldest);
+    known.states.set(name, ready);
+    this.used.delete(ready);
+    this.used.set(ready, () => known.states.delete(name));
+    const [oldest] = this.used;
+    if (this.used.size > MOST_READY && oldest) {
+      const [gone, letGo] = oldest;
+      this.used.delete(gone);
+      letGo();
+    }
     return ready;
   }
 
@@ -70,13 +84,10 @@ export class KnownDesigns {
     return tracer;
   }
 
-  private prepared(key: number, at: Moment | undefined): Ready | null {
-    const known = this.designs.get(key);
-    if (!known) throw new RangeError(`KnownDesigns.ready: there is no design ${key}`);
+  private prepared(known: KnownDesign, at: Moment | undefined): Ready | null {
     known.forging ??= evaluate(known.design);
     const program = compile(known.forging, at);
     if (program === null) return null;
-    this.compiled += 1;
     if (this.kernel === undefined) this.kernel = kernelOf();
     return {
       program,

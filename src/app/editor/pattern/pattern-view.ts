@@ -4,6 +4,7 @@ import { NgTemplateOutlet } from '@angular/common';
 import {
   ChangeDetectionStrategy,
   Component,
+  ElementRef,
   type TemplateRef,
   computed,
   inject,
@@ -19,6 +20,7 @@ import { type Design, steelIdsOf, steelOf } from '@shared/design';
 import type { Moment } from '@shared/pattern';
 import { toneOf } from '@shared/steels';
 import { UnitsStore } from '../../core/units/units-store';
+import { elementSize } from './element-size';
 import { LookPanel } from './look-panel';
 import { type PictureFacts, pictureText, viewText } from './picture-text';
 import { type Found, PictureSheet } from './picture-sheet';
@@ -34,6 +36,9 @@ const MODE_LABELS: readonly { readonly mode: Mode; readonly label: string }[] = 
   { mode: 'solid', label: 'Solid' },
   { mode: 'drawing', label: 'Drawing' },
 ];
+
+/** From this height on, CSS px, the drawing stands below the picture. */
+const TALL_PX = 620;
 
 let nextId = 0;
 
@@ -88,6 +93,9 @@ export class PatternView {
   protected readonly mode = computed(() =>
     this.sight.mode() === 'drawing' && this.drawing() === null ? 'surface' : this.sight.mode(),
   );
+  /** There is room for the drawing below the picture. */
+  protected readonly isTall = computed(() => this.drawing() !== null && this.size().heightPx >= TALL_PX);
+  private readonly size = elementSize(signal(inject<ElementRef<HTMLElement>>(ElementRef)));
   protected readonly isLookOpen = signal(false);
   protected readonly found = signal<Found | null>(null);
 

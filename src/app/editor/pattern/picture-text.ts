@@ -10,7 +10,7 @@ export function viewText({ label, place, widthMm, heightMm }: ShownView, format:
         ? place.mm < 0.005
           ? ', not ground'
           : ` ground ${format.length(place.mm)} deep`
-        : ` ${format.length(place.mm)} from the ${label === 'Cross-section' ? 'near end' : 'left side'}`;
+        : `, ${format.length(place.mm)} from the ${label === 'Cross-section' ? 'near end' : 'left side'}`;
   return `${label}${where}, ${format.size([widthMm, heightMm])}`;
 }
 

@@ -8,7 +8,7 @@ export interface ProbeWords {
   readonly layer: string;
   /** "band 0.42 mm, shows 1.6 mm wide"; empty where it can't be told. */
   readonly band: string;
-  /** "121.3 mm from the near end, 12.0 mm from the left, 5.3 mm up". */
+  /** "121.3 mm along, 12 mm across, 5.3 mm up": from the near end, the left side and the bottom. */
   readonly place: string;
 }
 
@@ -25,9 +25,9 @@ export function probeWords(
     layer: `Layer ${format.count(place + 1)} of ${format.count(layersInStack)}${where}`,
     band: bandText(bandMm, showsMm, format),
     place: [
-      `${format.length(Math.max(0, probe.xMm))} from the near end`,
-      `${format.length(Math.max(0, probe.yMm))} from the left`,
-      `${format.length(Math.max(0, probe.zMm))} from the bottom`,
+      `${format.length(Math.max(0, probe.xMm))} along`,
+      `${format.length(Math.max(0, probe.yMm))} across`,
+      `${format.length(Math.max(0, probe.zMm))} up`,
     ].join(', '),
   };
 }

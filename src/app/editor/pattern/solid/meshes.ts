@@ -124,7 +124,7 @@ export function bladeSkins(blank: Blank, bar: BarSize): readonly Skin[] {
     for (let i = 0; i <= ALONG; i++) {
       for (const sign of [1, -1] as const) positions.push(...at(i / ALONG, height, sign).point);
     }
-    return plain(name, positions, netIndices(ALONG, 1, (height === 0) === isEdgeLeft));
+    return plain(name, positions, netIndices(ALONG, 1, (height === 1) === isEdgeLeft));
   };
   const heel: number[] = [];
   for (let j = 0; j <= UP; j++) {
@@ -135,7 +135,7 @@ export function bladeSkins(blank: Blank, bar: BarSize): readonly Skin[] {
     side('right'),
     strip('spine', 1),
     strip('edge', 0),
-    plain('heel', heel, netIndices(UP, 1, !isEdgeLeft)),
+    plain('heel', heel, netIndices(UP, 1, isEdgeLeft)),
   ];
 }
 

@@ -30,6 +30,15 @@ const START: Standpoint = { aroundDeg: -28, aboveDeg: 42 };
 /** Grey of what is not pictured: ground steel. */
 const BARE = 0x8d9095;
 const FIELD_DEG = 30;
+/** How much of its length a bar shows upward at first: it lies askew. */
+const HALF_TILT = Math.sin((28 * Math.PI) / 180) * Math.sin((42 * Math.PI) / 180);
+
+/** Size of a solid, mm. */
+export interface SolidSize {
+  readonly lengthMm: number;
+  readonly widthMm: number;
+  readonly thicknessMm: number;
+}
 
 /** A solid on a canvas, to be turned. Draws only when something changed. */
 export class SolidScene {
@@ -40,7 +49,9 @@ export class SolidScene {
   private readonly light = new DirectionalLight(0xffffff, 1.5);
   private readonly meshes = new Map<string, Mesh<BufferGeometry, MeshStandardMaterial>>();
   private frame = 0;
-  private radiusMm = 100;
+  private size: SolidSize = { lengthMm: 100, widthMm: 100, thicknessMm: 100 };
+  /** Whether nobody has turned it yet: then it stays fitted. */
+  private isAsAtFirst = true;
 
   /**
    * @param turned called after each turn, by whatever means
@@ -57,22 +68,24 @@ export class SolidScene {
     this.controls = new OrbitControls(this.camera, canvas);
     this.controls.enablePan = false;
     this.controls.enableDamping = false;
+    this.controls.addEventListener('start', () => (this.isAsAtFirst = false));
     this.controls.addEventListener('change', () => this.moved());
     // The page scrolls with one finger; two turn and pinch.
     canvas.style.touchAction = 'pan-y';
   }
 
   /** Other skins in place of those there are; the standpoint stays, unless the size is another altogether. */
-  setSkins(skins: readonly Skin[], radiusMm: number, isFirst: boolean): void {
+  setSkins(skins: readonly Skin[], size: SolidSize): void {
     for (const [name, mesh] of this.meshes) {
       if (!skins.some((skin) => skin.name === name)) this.removeMesh(name, mesh);
     }
     for (const skin of skins) this.setSkin(skin);
-    const isOther = isFirst || radiusMm > 1.2 * this.radiusMm || radiusMm < this.radiusMm / 1.2;
-    this.radiusMm = radiusMm;
-    this.controls.minDistance = radiusMm * 0.15;
-    this.controls.maxDistance = radiusMm * 12;
-    if (isOther) this.reset();
+    const ratio = size.lengthMm / this.size.lengthMm;
+    this.size = size;
+    const reachMm = Math.hypot(size.lengthMm, size.widthMm, size.thicknessMm);
+    this.controls.minDistance = 0.08 * reachMm;
+    this.controls.maxDistance = 6 * reachMm;
+    if (this.isAsAtFirst || ratio > 1.2 || ratio < 1 / 1.2) this.reset();
     this.draw();
   }
 
@@ -99,22 +112,31 @@ export class SolidScene {
     this.renderer.setSize(widthPx, heightPx, false);
     this.camera.aspect = widthPx / heightPx;
     this.camera.updateProjectionMatrix();
+    if (this.isAsAtFirst) this.reset();
     this.draw();
   }
 
   /** Turns by so many degrees: to the right, and up. */
   turn(rightDeg: number, upDeg: number): void {
+    this.isAsAtFirst = false;
     const { aroundDeg, aboveDeg } = this.standpoint();
     this.stand({ aroundDeg: aroundDeg + rightDeg, aboveDeg: aboveDeg + upDeg }, this.distanceMm());
   }
 
   approach(factor: number): void {
+    this.isAsAtFirst = false;
     this.stand(this.standpoint(), this.distanceMm() / factor);
   }
 
   reset(): void {
-    const halfField = (Math.min(FIELD_DEG, FIELD_DEG * this.camera.aspect) * Math.PI) / 360;
-    this.stand(START, (this.radiusMm / Math.sin(halfField)) * 0.85);
+    // So near that it fits when it is turned broadside, the corner that comes nearest too.
+    const { lengthMm, widthMm, thicknessMm } = this.size;
+    const halfUp = Math.tan((FIELD_DEG * Math.PI) / 360);
+    const halfAcross = halfUp * this.camera.aspect;
+    const highMm = Math.hypot(widthMm, thicknessMm) + 0.5 * lengthMm * HALF_TILT;
+    const distanceMm = Math.max(lengthMm / halfAcross, highMm / halfUp) / 2;
+    this.stand(START, 1.08 * distanceMm + widthMm / 2);
+    this.isAsAtFirst = true;
   }
 
   dispose(): void {

@@ -98,15 +98,11 @@ export class SolidView {
       const { widthPx, heightPx, pixelRatio } = this.size();
       this.scene()?.resize(widthPx, heightPx, pixelRatio);
     });
-    let isFirst = true;
     effect(() => {
       const scene = this.scene();
-      if (scene === null) return;
-      const { lengthMm, widthMm, thicknessMm } = this.blank() ?? this.bar();
-      const radiusMm = Math.hypot(lengthMm, widthMm, thicknessMm) / 2;
+      const size = this.blank() ?? this.bar();
       const skins = this.skins();
-      untracked(() => scene.setSkins(skins, radiusMm, isFirst));
-      isFirst = false;
+      untracked(() => scene?.setSkins(skins, size));
     });
     effect((onCleanup) => {
       const scene = this.scene();
