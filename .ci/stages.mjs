@@ -42,12 +42,12 @@ const jasmine = (name, folder, tsConfig, after) => ({
 
 /** What is quick and needs no browser: the whole of `npm run check`. */
 export const quickStages = [
-  lint('the trade', 'shared'),
-  lint('all else', '.', '--ignore-pattern', 'shared/'),
   { name: 'format', run: () => node([tool('prettier'), '--check', '--log-level', 'warn', '.']) },
   { name: 'kernel', run: buildKernel },
   { name: 'import rules', specs: true, after: 'kernel', run: () => node(['.ci/import-rules.mjs']) },
   ...[
+    lint('the trade', 'shared'),
+    lint('all else', '.', '--ignore-pattern', 'shared/'),
     typeCheck('shared', 'shared/tsconfig.json'),
     typeCheck('shared specs', 'shared/tsconfig.spec.json'),
     typeCheck('server', 'server/tsconfig.json'),

@@ -27,12 +27,12 @@ export function parseDesign(json: unknown): ParsedDesign {
   }
   let document = json as Record<string, unknown>;
   if (document['format'] !== DESIGN_FORMAT) {
-    const message = `The field format says ${JSON.stringify(document['format']) ?? 'nothing'}; a design says "${DESIGN_FORMAT}".`;
+    const message = `The field format says ${said(document['format'])}; a design says "${DESIGN_FORMAT}".`;
     return refused([{ path: ['format'], code: 'not-a-design', message }]);
   }
   const version = document['version'];
   if (typeof version !== 'number' || !Number.isInteger(version) || version < 1) {
-    const message = `The field version says ${JSON.stringify(version) ?? 'nothing'}; it must be a whole number from 1 on.`;
+    const message = `The field version says ${said(version)}; it must be a whole number from 1 on.`;
     return refused([{ path: ['version'], code: 'version-unknown', message }]);
   }
   if (version > DESIGN_VERSION) {
@@ -93,6 +93,11 @@ export function designProblems(design: Design): readonly DesignProblem[] {
     );
   }
   return problems;
+}
+
+/** A value as it stands in the file. */
+function said(value: unknown): string {
+  return value === undefined ? 'nothing' : JSON.stringify(value);
 }
 
 function asProblems(issue: z.core.$ZodIssue): DesignProblem[] {

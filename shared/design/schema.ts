@@ -134,4 +134,4 @@ export const designSchema: z.ZodType<Design> = z.strictObject({
   limits: partialOf(LIMIT_DEFAULTS).optional(),
   unevenness: z.number().min(0).max(1).optional(),
   seed: z.number().int().min(0).max(2_147_483_647).optional(),
-}) as unknown as z.ZodType<Design>;
+});

@@ -36,7 +36,7 @@ export function startOf(
   }
   const laid = laidPieces(bar, ground);
   if (laid.refusal) return { state: null, refusal: laid.refusal, overhangs: [], pieces: [] };
-  if (keptState && kept && isSame(kept.pieces, laid.pieces)) {
+  if (keptState && isSame(kept.pieces, laid.pieces)) {
     return { state: keptState, refusal: null, overhangs: kept.overhangs, pieces: kept.pieces };
   }
   const assembled = assemble(laid.pieces, bar.start.along);

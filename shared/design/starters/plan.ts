@@ -57,5 +57,5 @@ export function designOf(name: string, note: string, bars: readonly Bar[], blank
 }
 
 function numbered(barId: string, plans: readonly StepPlan[]): readonly Step[] {
-  return plans.map((plan, i) => ({ id: `${barId}-${i + 1}`, ...plan }) as Step);
+  return plans.map((plan, i) => ({ id: `${barId}-${i + 1}`, ...plan }));
 }

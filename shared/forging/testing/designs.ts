@@ -7,7 +7,7 @@ export type StepPlan = Unnamed<Step>;
 
 /** Steps with ids that tell the bar and the place. */
 export function stepsOf(barId: string, plans: readonly StepPlan[]): readonly Step[] {
-  return plans.map((plan, i) => ({ ...plan, id: `${barId}-${i + 1}` }) as Step);
+  return plans.map((plan, i) => ({ ...plan, id: `${barId}-${i + 1}` }));
 }
 
 /** `count` layers of two steels in turn, from the bottom, starting with the first. */
