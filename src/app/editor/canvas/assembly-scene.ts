@@ -3,6 +3,7 @@ import type { Assembly } from '@shared/design';
 import type { Format } from '@shared/units';
 import { turnText } from './assembly-text';
 import type { LaidPiece } from './bar-scene';
+import { sticksOut } from './bar-text';
 import { spreadLabels } from './label-spread';
 import { type Measure, shortened } from './paper';
 import { LABEL_FONT, LABEL_PX } from './stack-scene';
@@ -17,13 +18,15 @@ export interface AssemblyFrame {
 }
 
 const LIST_GAP_PX = 44;
+/** Room for the figure of what sticks out, px. */
+export const AMOUNT_PX = 66;
 /** Two lines for each piece: its bar, and how it lies. */
 const ENTRY_PX = 2 * LABEL_PX - 2;
 
 export function assemblyFrame(widthPx: number, heightPx: number): AssemblyFrame {
   const isNarrow = widthPx < 560;
   const left = isNarrow ? 60 : 82;
-  const listPx = isNarrow ? Math.round(widthPx * 0.34) : 220;
+  const listPx = isNarrow ? Math.round(widthPx * 0.36) : 250;
   const area = {
     leftPx: left,
     topPx: 56,
@@ -92,12 +95,16 @@ export function pieceList(
     fromPx,
     toEndPx,
   );
-  const nameRoomPx = frame.listPx - 30;
+  const nameRoomPx = frame.listPx - 44;
   const rightPx = Math.max(
     ...laid.map((piece) => toPx(viewport, { acrossMm: piece.acrossMm + piece.bar.widthMm, upMm: 0 }).xPx),
     0,
   );
-  const leftPx = Math.min(rightPx + LIST_GAP_PX, frame.widthPx - frame.listPx - 8);
+  const hasAmounts = isUp && laid.some((piece) => sticksOut(piece.overhang.acrossMm));
+  const leftPx = Math.min(
+    rightPx + LIST_GAP_PX + (hasAmounts ? AMOUNT_PX : 0),
+    frame.widthPx - frame.listPx - 8,
+  );
   const entries = falling.map(({ place }, i) => {
     const piece = assembly.pieces[place];
     const bar = laid[place]?.bar;

@@ -122,7 +122,8 @@ function inColumns(bars: readonly Bar[], columns: readonly (readonly Bar[])[]): 
           [bendPx, y2],
           [x2, y2],
         ],
-        figureAt: [x1 + 20, y1],
+        // Where it comes in: what goes out of a bar may run in one line with others.
+        figureAt: [x2 - 26, y2],
       };
     });
   });

@@ -29,8 +29,8 @@ interface ShownBar {
   readonly topPx: number;
   readonly name: string;
   readonly words: string;
-  /** What a screen reader says: the name, what it is, what it goes into. */
-  readonly label: string;
+  /** What the lines and the section show, for whoever can't see them: what it is, what it goes into. */
+  readonly more: string;
   readonly isStopped: boolean;
 }
 
@@ -107,14 +107,12 @@ export class BarsMapCanvas {
       return pieces ? [`${pieces === 1 ? '1 piece goes' : `${pieces} pieces go`} into ${user.name}`] : [];
     });
     const isResult = bar.id === this.design().result;
-    const label = [
-      bar.name,
+    const more = [
       ...(isResult ? ['the billet'] : []),
       bar.start.kind === 'stack' ? 'a stack' : `an assembly of ${bar.start.pieces.length} pieces`,
       ...(layers === '' ? [] : [layers]),
-      ...(words === '' ? [] : [words]),
       ...uses,
     ].join(', ');
-    return { name: bar.name, words, label, isStopped };
+    return { name: bar.name, words, more, isStopped };
   }
 }

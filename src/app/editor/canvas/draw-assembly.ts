@@ -6,9 +6,10 @@ import {
   handleAt,
   spanMm,
 } from './assembly-geometry';
-import type { AssemblyFrame, PieceEntry, PieceList } from './assembly-scene';
+import { AMOUNT_PX, type AssemblyFrame, type PieceEntry, type PieceList } from './assembly-scene';
 import type { AssemblyTool } from './assembly-tool';
 import { boxPx } from './bar-scene';
+import { sticksOut } from './bar-text';
 import { drawBarView } from './draw-bar-view';
 import { drawDimension } from './draw-dimension';
 import { type PiecesPicture, drawPieces } from './draw-pieces';
@@ -92,8 +93,11 @@ function drawEntry(context: CanvasRenderingContext2D, picture: AssemblyPicture, 
     context.strokeStyle = isChosen ? paper.colours.steel : paper.colours.edge;
     context.lineWidth = 1;
     context.beginPath();
-    context.moveTo(from.xPx + 3, from.yPx);
-    context.lineTo(from.xPx + 6, from.yPx);
+    // The figure of what sticks out stands first.
+    const overhangMm = picture.laid[entry.place]?.overhang.acrossMm ?? 0;
+    const startPx = from.xPx + (sticksOut(overhangMm) ? AMOUNT_PX : 3);
+    context.moveTo(startPx, from.yPx);
+    context.lineTo(startPx + 3, from.yPx);
     context.lineTo(leftPx - 14, entry.middlePx);
     context.lineTo(leftPx - 8, entry.middlePx);
     context.stroke();

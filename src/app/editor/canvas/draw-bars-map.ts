@@ -2,11 +2,10 @@ import type { BarState } from '@shared/bar';
 import { ARROW_PX } from './dimension-line';
 import type { BarsMap, MapLink } from './bars-map-layout';
 import { drawBarView } from './draw-bar-view';
-import { haloed } from './draw-dimension';
 import type { SteelInk } from './draw-layers';
 import { outline } from './draw-pieces';
 import type { HatchTiles } from './hatch-tiles';
-import { FIGURES, type Paper } from './paper';
+import { FIGURES, type Paper, measureText } from './paper';
 import type { Paint } from './sheet';
 
 /** The box of a thumbnail within its bar, px. */
@@ -77,13 +76,11 @@ function drawLink(context: CanvasRenderingContext2D, picture: MapPicture, link: 
   context.font = COUNT_FONT;
   context.textAlign = 'center';
   context.textBaseline = 'middle';
+  const figure = `${link.pieces} ×`;
   const [atX, atY] = link.figureAt;
-  haloed(
-    context,
-    `${link.pieces} ×`,
-    atX,
-    atY,
-    isChosen ? paper.colours.ink : paper.colours.quiet,
-    paper.colours.ground,
-  );
+  const widthPx = measureText(figure, COUNT_FONT) + 6;
+  context.fillStyle = paper.colours.ground;
+  context.fillRect(atX - widthPx / 2, atY - 9, widthPx, 18);
+  context.fillStyle = isChosen ? paper.colours.ink : paper.colours.quiet;
+  context.fillText(figure, atX, atY + 0.5);
 }
