@@ -1,11 +1,11 @@
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
-import { type Design, STARTERS } from '@shared/design';
+import { STARTERS } from '@shared/design';
 import { OPEN_PORT } from './compute-port';
 import { PatternThumb } from './pattern-thumb';
 import { type InlinePort, inlinePort } from './testing/inline-port';
 
 const BAR = { lengthMm: 330, widthMm: 44, thicknessMm: 6 };
-const LADDER = STARTERS.find(({ id }) => id === 'laddered')?.design ?? (STARTERS[0]?.design as Design);
+const LADDER = STARTERS.find(({ id }) => id === 'laddered')?.design ?? (STARTERS[0]?.design);
 
 describe('PatternThumb', () => {
   let port: InlinePort;

@@ -53,13 +53,17 @@ export class DraftWriter {
     });
   }
 
+  private hasMore(): boolean {
+    return this.waiting !== null;
+  }
+
   private async run(): Promise<void> {
     while (this.waiting) {
       const draft = this.waiting();
       this.waiting = null;
       await this.drafts.put(draft);
       // What came meanwhile waits a little: a drag changes the design sixty times a second.
-      if (this.waiting) await this.rest();
+      if (this.hasMore()) await this.rest();
     }
     this.writing = null;
   }

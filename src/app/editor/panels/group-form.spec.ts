@@ -28,7 +28,7 @@ describe('GroupForm', () => {
     const outcome = async () => {
       await fixture.whenStable();
       const element = fixture.nativeElement as HTMLElement;
-      return element.querySelector('.outcome')?.textContent?.replace(/\s+/g, ' ').trim();
+      return element.querySelector('.outcome')?.textContent.replace(/\s+/g, ' ').trim();
     };
     return { loader, laid, outcome };
   }

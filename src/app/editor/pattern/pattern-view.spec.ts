@@ -1,4 +1,4 @@
-import { HarnessLoader } from '@angular/cdk/testing';
+import { type HarnessLoader } from '@angular/cdk/testing';
 import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
 import { MatSliderHarness } from '@angular/material/slider/testing';
@@ -94,7 +94,7 @@ describe('PatternView', () => {
     await settled();
   }
 
-  it('shows the top face of the state, a little ground, and says so', async () => {
+  it('shows the top face of the state, a little ground, and says so', () => {
     expect(tasks().at(-1)?.task.surface).toEqual({ kind: 'face', face: 'top', depthMm: 1 });
     expect(tasks().at(-1)?.task.at).toEqual({ bar: 'billet', state: DRAWN });
     expect(element('.sheet').getAttribute('aria-label')).toMatch(
@@ -135,7 +135,7 @@ describe('PatternView', () => {
   it('tells by keyboard what lies under the crosshair', async () => {
     await choose('cross');
     await press('ArrowUp');
-    const spoken = element('lw-picture-sheet [aria-live]').textContent ?? '';
+    const spoken = element('lw-picture-sheet [aria-live]').textContent;
     expect(spoken).toMatch(
       /^(1084|15N20 strip), layer \d+ of 13, band 0\.\d+ mm\. 176\.\d mm along, 20 mm across, /,
     );

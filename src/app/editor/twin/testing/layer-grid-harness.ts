@@ -1,4 +1,4 @@
-import { ComponentHarness, type TestElement, TestKey } from '@angular/cdk/testing';
+import { ComponentHarness, type TestElement, type TestKey } from '@angular/cdk/testing';
 
 /** Keys held down while another is pressed. */
 export interface Held {

@@ -1,4 +1,4 @@
-import { ComponentHarness, TestKey } from '@angular/cdk/testing';
+import { ComponentHarness, type TestKey } from '@angular/cdk/testing';
 
 /** What fields for quantities have in common in a test. */
 export abstract class TypedEntryHarness extends ComponentHarness {
