@@ -66,6 +66,7 @@ function drawDimensions(context: CanvasRenderingContext2D, picture: AssemblyPict
     paper,
     {
       direction: 'vertical',
+      hasRoomBeside: true,
       fromPx: whole.topPx,
       toPx: whole.topPx + whole.heightPx,
       atPx: corner.xPx - 20,

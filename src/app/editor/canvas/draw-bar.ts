@@ -122,6 +122,7 @@ function dimensions(
     paper,
     {
       direction: 'vertical',
+      hasRoomBeside: true,
       fromPx: box.topPx,
       toPx: box.topPx + box.heightPx,
       atPx: box.leftPx - 18,

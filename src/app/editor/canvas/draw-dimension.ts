@@ -19,6 +19,8 @@ export interface Dimension {
   readonly figure: string;
   /** The part of the sheet the line may take, along the direction. */
   readonly seenPx: readonly [number, number];
+  /** A figure for which a vertical line is too short is written level beside it; there must be nothing there. */
+  readonly hasRoomBeside?: boolean;
   /** Ember while it changes. */
   readonly isLive?: boolean;
 }
@@ -76,7 +78,7 @@ function drawFigure(
   context: CanvasRenderingContext2D,
   paper: Paper,
   layout: DimensionLine,
-  { direction, atPx, fromPx, toPx, figure, seenPx, isLive }: Dimension,
+  { direction, atPx, fromPx, toPx, figure, seenPx, isLive, hasRoomBeside }: Dimension,
 ): void {
   const ink = isLive ? paper.colours.ember : paper.colours.ink;
   context.save();
@@ -85,7 +87,7 @@ function drawFigure(
   context.textAlign = 'center';
   if (direction === 'horizontal') {
     haloed(context, figure, layout.figurePx, atPx, ink, paper.colours.ground);
-  } else if (layout.isBeside) {
+  } else if (layout.isBeside && hasRoomBeside) {
     // Upright and level with what it measures, where there is no height to write along the line.
     context.textAlign = 'right';
     const middlePx = (Math.max(fromPx, seenPx[0]) + Math.min(toPx, seenPx[1])) / 2;

@@ -2,6 +2,7 @@ import type { Format } from '@shared/units';
 import { drawDimension, FIGURE_FONT, haloed } from './draw-dimension';
 import { type SteelInk, drawLayers } from './draw-layers';
 import { type StackPicture, drawHeadline } from './draw-stack';
+import { boxOf, outlined, runsOf } from './draw-stack-box';
 import { staysPut } from './landing';
 import { type Paper, measureText } from './paper';
 import type { Paint } from './sheet';
@@ -30,7 +31,6 @@ export function paintWork(work: StackWork): Paint {
   return (context, pixelRatio) => {
     const { picture, tool } = work;
     const isMoving = tool.kind === 'moving';
-    if (!isMoving) drawChosen(context, picture);
     if (tool.kind === 'idle' && work.dropAt === null) drawHover(context, picture, work.hover);
     const isAtRest = tool.kind === 'idle' || tool.kind === 'pressed' || tool.kind === 'waiting';
     if (isAtRest || tool.kind === 'spent') drawGrip(context, picture, work.isCoarse);
@@ -70,13 +70,6 @@ export function headlineOf(
 function placeWords(to: number, count: number): string {
   if (to === 0) return 'at the bottom';
   return to >= count ? 'on top' : `between layers ${to} and ${to + 1}`;
-}
-
-function drawChosen(context: CanvasRenderingContext2D, picture: StackPicture): void {
-  const { chosen, geometry, paper } = picture;
-  for (const [first, last] of runsOf(chosen, geometry.count)) {
-    outlined(context, paper, boxOf(picture, first, last), paper.colours.steel, 2.5);
-  }
 }
 
 function drawHover(context: CanvasRenderingContext2D, picture: StackPicture, hover: StackHit): void {
@@ -279,59 +272,6 @@ function drawMarquee(context: CanvasRenderingContext2D, paper: Paper, a: PointPx
   context.setLineDash([4, 3]);
   context.strokeRect(x + 0.5, y + 0.5, width, height);
   context.setLineDash([]);
-}
-
-interface Box {
-  readonly x: number;
-  readonly y: number;
-  readonly width: number;
-  readonly height: number;
-}
-
-function boxOf(picture: StackPicture, first: number, last: number): Box {
-  const { geometry, viewport, frame } = picture;
-  const rect = stackRect(geometry, viewport);
-  const top = rect.bottomPx - seamMm(geometry, last + 1) * viewport.pxPerMm;
-  const bottom = rect.bottomPx - seamMm(geometry, first) * viewport.pxPerMm;
-  const left = Math.max(-20, rect.leftPx);
-  return {
-    x: left,
-    y: top,
-    width: Math.min(frame.widthPx + 20, rect.rightPx) - left,
-    height: bottom - top,
-  };
-}
-
-/** An outline that shows on any tone, and about the thinnest foil too. */
-function outlined(
-  context: CanvasRenderingContext2D,
-  paper: Paper,
-  box: Box,
-  colour: string,
-  widthPx: number,
-): void {
-  const grow = box.height < 6 ? 3 : 0;
-  const x = Math.round(box.x) + (grow > 0 ? -2 : 1);
-  const y = box.y - grow + (grow > 0 ? 0 : 1);
-  const width = Math.round(box.width) + (grow > 0 ? 4 : -2);
-  const height = box.height + 2 * grow - (grow > 0 ? 0 : 2);
-  context.lineJoin = 'miter';
-  context.strokeStyle = paper.colours.ground;
-  context.lineWidth = widthPx + 2.5;
-  context.strokeRect(x, y, width, height);
-  context.strokeStyle = colour;
-  context.lineWidth = widthPx;
-  context.strokeRect(x, y, width, height);
-}
-
-function runsOf(places: ReadonlySet<number>, count: number): readonly (readonly [number, number])[] {
-  const runs: [number, number][] = [];
-  for (const place of [...places].filter((p) => p < count).sort((a, b) => a - b)) {
-    const last = runs[runs.length - 1];
-    if (last && last[1] === place - 1) last[1] = place;
-    else runs.push([place, place]);
-  }
-  return runs;
 }
 
 function written(format: Format, mm: number): string {

@@ -1,5 +1,6 @@
 import type { Format } from '@shared/units';
 import { drawDimension, haloed } from './draw-dimension';
+import { boxOf, outlined, runsOf } from './draw-stack-box';
 import { type SteelInk, drawLayers } from './draw-layers';
 import type { HatchTiles } from './hatch-tiles';
 import { type Measure, type Paper, measureText } from './paper';
@@ -24,6 +25,8 @@ export interface StackPicture {
   readonly frame: StackFrame;
   readonly column: LabelColumn;
   readonly chosen: ReadonlySet<number>;
+  /** What is chosen is in the hand: it has no outline where it lay. */
+  readonly isCarrying: boolean;
   readonly format: Format;
   readonly paper: Paper;
   /** Index into `inks` for each layer. */
@@ -46,6 +49,12 @@ export function paintStack(picture: StackPicture): Paint {
       Math.round(rect.rightPx - rect.leftPx) + 0.5,
       Math.round(rect.bottomPx - rect.topPx) + 0.5,
     );
+    // Under the margins and the names: enlarged, it would run over them.
+    if (!picture.isCarrying) {
+      for (const [first, last] of runsOf(picture.chosen, geometry.count)) {
+        outlined(context, paper, boxOf(picture, first, last), paper.colours.steel, 2.5);
+      }
+    }
     drawDimensions(context, picture, frame);
   };
 }

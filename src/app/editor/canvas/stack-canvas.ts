@@ -148,12 +148,14 @@ export class StackCanvas {
       measure: measureText,
     });
   });
+  private readonly isCarrying = computed(() => this.tool().kind === 'moving');
   private readonly picture = computed<StackPicture>(() => ({
     geometry: this.geometry(),
     viewport: this.view.viewport(),
     frame: this.frame(),
     column: this.column(),
     chosen: this.chosen(),
+    isCarrying: this.isCarrying(),
     format: this.format(),
     paper: this.paper(),
     ...this.inks(),

@@ -206,24 +206,27 @@ const NAMED_IN_GROUP = 4;
 /** The groups that repeat, or null when they find no room or there are none. */
 function groupDrafts(ground: LabelGround, first: number, last: number, room: number): Draft[] | null {
   const { layers } = ground.stack;
-  const drafts = repeatsOf(layers, isSameLayer)
-    .filter((group) => group.from <= last && group.from + group.period * group.times > first)
-    .map((group): Draft => {
-      if (group.period * group.times === 1) return layerDraft(ground, group.from);
-      const named = layers.slice(group.from, group.from + Math.min(group.period, NAMED_IN_GROUP)).reverse();
-      const rest = group.period - named.length;
-      const lines = [
-        ...(rest > 0 ? [{ name: `and ${rest} more`, figure: '' }] : []),
-        ...named.map((layer) => lineOf(ground, layer)),
-      ];
-      return {
-        place: null,
-        ...spanOf(ground, group.from, group.from + group.period * group.times),
-        heightPx: LABEL_PX * lines.length,
-        number: group.times === 1 ? '' : `${group.times} ×`,
-        lines,
-      };
-    });
+  const groups = repeatsOf(layers, isSameLayer).filter(
+    (group) => group.from <= last && group.from + group.period * group.times > first,
+  );
+  // A long stretch without order says nothing as a group.
+  if (groups.some((group) => group.times === 1 && group.period > NAMED_IN_GROUP)) return null;
+  const drafts = groups.map((group): Draft => {
+    if (group.period * group.times === 1) return layerDraft(ground, group.from);
+    const named = layers.slice(group.from, group.from + Math.min(group.period, NAMED_IN_GROUP)).reverse();
+    const rest = group.period - named.length;
+    const lines = [
+      ...(rest > 0 ? [{ name: `and ${rest} more`, figure: '' }] : []),
+      ...named.map((layer) => lineOf(ground, layer)),
+    ];
+    return {
+      place: null,
+      ...spanOf(ground, group.from, group.from + group.period * group.times),
+      heightPx: LABEL_PX * lines.length,
+      number: group.times === 1 ? '' : `${group.times} ×`,
+      lines,
+    };
+  });
   const lines = drafts.reduce((sum, draft) => sum + draft.lines.length, 0);
   return lines <= room ? drafts : null;
 }
