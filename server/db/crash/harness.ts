@@ -31,23 +31,28 @@ interface CrashPlan {
   readonly onKill?: (report: CrashReport) => void;
 }
 
+/** A process that was to end itself is killed after this. */
+const PATIENCE_MS = 60_000;
+
 const NOTHING: CrashReport = { kills: 0, acknowledged: 0, lost: 0, unusable: 0, slowestRestartMs: 0 };
 
 /**
- * Kills a process that writes through the queue, again and again on the same folder: every second time from outside at a
- * random moment, otherwise at a chosen call of the file system. After each kill the folder is opened as at a start.
+ * Kills a process that writes through the queue, again and again on the same folder: from outside a random moment after a
+ * random number of writes, or at a random call of the file system. After each kill the folder is opened as at a start.
  */
 export async function crashQueue(plan: CrashPlan): Promise<CrashReport> {
   const random = seededRandom(plan.seed);
   return crash({ ...plan, isEnough: () => false }, async (victim, run) => {
     const order: Order = { kind: 'queue', folder: plan.folder, run };
     const call = FAULTY_CALLS[Math.floor(random() * FAULTY_CALLS.length)];
-    const nth = 4 + Math.floor(random() * 40);
-    const isOwnDeath = random() < 0.5 && call !== undefined;
-    const afterMs = 100 + random() * 600;
-    const acknowledged = await victim.run(isOwnDeath ? { ...order, dieAt: { call, nth } } : order, () =>
-      sleep(afterMs),
-    );
+    const dieAt = call && random() < 0.5 ? { call, nth: 4 + Math.floor(random() * 12) } : undefined;
+    const writes = 1 + Math.floor(random() * 250);
+    const moreMs = random() * 60;
+    const acknowledged = await victim.run({ ...order, dieAt }, async () => {
+      if (dieAt) return sleep(PATIENCE_MS, undefined, { ref: false });
+      await victim.acknowledges(writes);
+      await sleep(moreMs);
+    });
     return { acknowledged, revisions: () => revisionsInFolder(plan.folder) };
   });
 }

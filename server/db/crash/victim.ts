@@ -24,15 +24,20 @@ export class Victim {
     });
   }
 
+  /** Resolves when so many writes have been acknowledged. */
+  async acknowledges(count: number): Promise<void> {
+    await this.#until(() => this.#output.split('\n', count + 1).length > count);
+  }
+
   /**
    * Lets it write, kills it when `moment`, asked for after the first acknowledgement, has come (unless it ends itself
    * before), and gives the revision that was acknowledged of each design.
    */
   async run(order: Order, moment: () => Promise<void>): Promise<Map<string, number>> {
-    await this.#outputHolds('ready\n');
+    await this.#until(() => this.#output.includes('ready\n'));
     this.#output = '';
     this.#process.stdin.write(`${JSON.stringify(order)}\n`);
-    await Promise.race([this.#outputHolds('\n'), this.#ended]);
+    await Promise.race([this.acknowledges(1), this.#ended]);
     await Promise.race([moment(), this.#ended]);
     this.kill();
     await this.#ended;
@@ -49,11 +54,11 @@ export class Victim {
     this.#process.kill('SIGKILL');
   }
 
-  #outputHolds(text: string): Promise<void> {
-    return new Promise((resolve, reject) => {
+  /** Resolves when its output is as wanted, or when it has ended. */
+  #until(isReached: () => boolean): Promise<void> {
+    return new Promise((resolve) => {
       this.#onOutput = () => {
-        if (this.#output.includes(text)) resolve();
-        else if (this.#process.exitCode !== null) reject(new Error('The process ended before its time.'));
+        if (isReached() || this.#process.signalCode !== null || this.#process.exitCode !== null) resolve();
       };
       this.#onOutput();
     });
