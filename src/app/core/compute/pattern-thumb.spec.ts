@@ -5,7 +5,7 @@ import { PatternThumb } from './pattern-thumb';
 import { type InlinePort, inlinePort } from './testing/inline-port';
 
 const BAR = { lengthMm: 330, widthMm: 44, thicknessMm: 6 };
-const LADDER = STARTERS.find(({ id }) => id === 'laddered')?.design ?? STARTERS[0]?.design;
+const LADDER = STARTERS.find(({ id }) => id === 'laddered')?.design as Design;
 
 describe('PatternThumb', () => {
   let port: InlinePort;

@@ -74,7 +74,8 @@ function placeOf(
     x: new Float64Array(1),
     y: new Float64Array(1),
     z: new Float64Array(1),
-    isMetal: new Uint8Array(1),
+    // Flat surfaces are metal throughout, and don't say so.
+    isMetal: Uint8Array.of(1),
     slope: new Float32Array(1),
   };
   surfaceMap(surface, program, blank).place(Float64Array.of(across), Float64Array.of(up), 1, points);
