@@ -24,7 +24,7 @@ journey('the front door', {}, (given) => {
         expect(await visitor.sidewaysScrollPx()).toBe(0);
         expect(await visitor.accessibilityViolations()).toEqual([]);
         await visitor.screenshot(`front-door-${view.width}-${theme}`);
-      }, 60_000);
+      }, 180_000);
     }
   }
 

@@ -37,5 +37,5 @@ describe('npm start', () => {
       expect(code).withContext(said).toBe(0);
       await rm(dataDir, { recursive: true, force: true });
     }
-  }, 60_000);
+  }, 180_000);
 });

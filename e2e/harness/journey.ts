@@ -36,7 +36,7 @@ export function journey(name: string, env: NodeJS.ProcessEnv, body: (given: Give
 
     beforeAll(async () => {
       [app, browser] = await Promise.all([BuiltApp.start(env), launchChromium()]);
-    }, 60_000);
+    }, 180_000);
 
     afterEach(async () => {
       const open = visitors;
@@ -46,12 +46,12 @@ export function journey(name: string, env: NodeJS.ProcessEnv, body: (given: Give
         await visitor.screenshot(`ended/${fileName(currentSpec)}-${index + 1}`);
         await visitor.close();
       }
-    });
+    }, 180_000);
 
     afterAll(async () => {
       await browser?.close();
       await app?.stop();
-    }, 60_000);
+    }, 180_000);
 
     body(given);
   });

@@ -66,7 +66,7 @@ export class Visitor {
       timezoneId: 'UTC',
     };
     const context = await browser.newContext(options);
-    context.setDefaultTimeout(15_000);
+    context.setDefaultTimeout(60_000);
     const visitor = new Visitor(context, await context.newPage());
     context.on('console', (message) => {
       if (message.type() === 'error') visitor.note(`${message.text()} (${message.location().url})`);
