@@ -1,5 +1,5 @@
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
-import { STARTERS } from '@shared/design';
+import { type Design, STARTERS } from '@shared/design';
 import { OPEN_PORT } from './compute-port';
 import { PatternThumb } from './pattern-thumb';
 import { type InlinePort, inlinePort } from './testing/inline-port';
