@@ -73,6 +73,8 @@ export interface TwistOp {
   readonly thicknessMm: number;
   readonly radPerMm: number;
   readonly reversalMm: number;
+  /** Whether it turns back at all. */
+  readonly isReversed: boolean;
 }
 
 /** The section turned by 45° and squared again. */

@@ -57,7 +57,8 @@ const SRGB_OF_LIGHT = Uint8Array.from({ length: TABLE + 1 }, (_, i) => {
 
 /** Linear light, clipped to 0–1, as an sRGB channel, 0–255. */
 export function srgbOfLinear(light: number): number {
-  return SRGB_OF_LIGHT[Math.round(Math.max(0, Math.min(1, light)) * TABLE)] as number;
+  if (light <= 0) return 0;
+  return light >= 1 ? 255 : (SRGB_OF_LIGHT[Math.round(light * TABLE)] as number);
 }
 
 /** CIE L*, 0–100, of a luminance. **Source**: CIE 15. */

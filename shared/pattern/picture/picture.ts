@@ -3,7 +3,7 @@ import type { Tracer } from '../tracer.js';
 import type { PictureRequest } from './request.js';
 import { FIRST_SAMPLES, MOST_SAMPLES } from './sample-net.js';
 import { type Counters, Sampler, type Task } from './sampler.js';
-import { NO_METAL, type Samples, addSlot } from './samples.js';
+import { NO_METAL, type Samples, addSlots } from './samples.js';
 
 /** How far a picture has come. Each stage leaves a whole picture: blocks of 4 × 4 pixels, then pixels, then softened borders. */
 export const STAGES = ['blocks', 'pixels', 'borders', 'finer', 'done'] as const;
@@ -97,22 +97,33 @@ export class Picture {
     const { task, samples } = this;
     const most = this.request.samples;
     const pixels = samples.layer.length;
+    if (this.stageNow === 'blocks') {
+      this.collectBlocks();
+      return;
+    }
     while (this.next < pixels && task.count + MOST_SAMPLES <= task.pixel.length) {
       const pixel = this.next++;
-      switch (this.stageNow) {
-        case 'blocks':
-          if (this.isBlockMiddle(pixel)) this.add(pixel, -1);
-          break;
-        case 'pixels':
-          if (samples.isSampled[pixel] === 0) this.add(pixel, -1);
-          break;
-        case 'borders':
-          if (samples.slot[pixel] !== -1) this.addFine(pixel, 0, Math.min(FIRST_SAMPLES, most));
-          break;
-        default:
-          if (this.isMixed(pixel)) this.addFine(pixel, FIRST_SAMPLES, most);
-      }
+      if (this.stageNow === 'pixels') {
+        if (samples.isSampled[pixel] === 0) this.add(pixel, -1);
+      } else if (samples.slot[pixel] === -1) continue;
+      else if (this.stageNow === 'borders') this.addFine(pixel, 0, Math.min(FIRST_SAMPLES, most));
+      else if (this.isMixed(pixel)) this.addFine(pixel, FIRST_SAMPLES, most);
     }
+  }
+
+  /** The middles of the blocks, row by row of them. */
+  private collectBlocks(): void {
+    const { task } = this;
+    const { widthPx, heightPx, layer } = this.samples;
+    const inRow = Math.ceil(widthPx / BLOCK);
+    const blocks = inRow * Math.ceil(heightPx / BLOCK);
+    while (this.next < blocks && task.count < task.pixel.length) {
+      const block = this.next++;
+      const column = blockMiddle((block % inRow) * BLOCK, widthPx);
+      const row = blockMiddle(Math.floor(block / inRow) * BLOCK, heightPx);
+      this.add(row * widthPx + column, -1);
+    }
+    if (this.next === blocks) this.next = layer.length;
   }
 
   private addFine(pixel: number, from: number, to: number): void {
@@ -126,51 +137,49 @@ export class Picture {
     task.count += 1;
   }
 
-  private isBlockMiddle(pixel: number): boolean {
-    const { widthPx, heightPx } = this.samples;
-    const column = pixel % widthPx;
-    const row = (pixel - column) / widthPx;
-    return column === blockMiddle(column, widthPx) && row === blockMiddle(row, heightPx);
-  }
-
   /** Shows each block in the tone of its middle until its own pixels are known. */
   private spreadBlocks(): void {
     const { widthPx, heightPx, layer, slag, slope } = this.samples;
+    const hasSlag = slag.length > 0;
+    const isSloping = slope.length > 0;
+    const from = Int32Array.from({ length: widthPx }, (_, column) => blockMiddle(column, widthPx));
     for (let row = 0; row < heightPx; row++) {
+      const middleRow = blockMiddle(row, heightPx) * widthPx;
       for (let column = 0; column < widthPx; column++) {
-        const from = blockMiddle(row, heightPx) * widthPx + blockMiddle(column, widthPx);
+        const middle = middleRow + (from[column] as number);
         const pixel = row * widthPx + column;
-        layer[pixel] = layer[from] as number;
-        slag[pixel] = slag[from] as number;
-        slope[pixel] = slope[from] as number;
+        layer[pixel] = layer[middle] as number;
+        if (hasSlag) slag[pixel] = slag[middle] as number;
+        if (isSloping) slope[pixel] = slope[middle] as number;
       }
     }
   }
 
   private addBorderSlots(): void {
     const { widthPx, heightPx, layer } = this.samples;
-    const isUniform = this.request.isUniform === true;
-    for (let row = 0; row < heightPx; row++) {
-      for (let column = 0; column < widthPx; column++) {
-        const pixel = row * widthPx + column;
-        const own = layer[pixel];
-        const isBorder =
-          isUniform ||
-          (column > 0 && layer[pixel - 1] !== own) ||
-          (column < widthPx - 1 && layer[pixel + 1] !== own) ||
-          (row > 0 && layer[pixel - widthPx] !== own) ||
-          (row < heightPx - 1 && layer[pixel + widthPx] !== own);
-        if (isBorder) addSlot(this.samples, pixel);
+    const isBorder = new Uint8Array(layer.length);
+    if (this.request.isUniform) isBorder.fill(1);
+    else {
+      for (let row = 0; row < heightPx; row++) {
+        for (let pixel = row * widthPx; pixel < (row + 1) * widthPx; pixel++) {
+          const own = layer[pixel];
+          if (pixel + 1 < (row + 1) * widthPx && layer[pixel + 1] !== own) {
+            isBorder[pixel] = isBorder[pixel + 1] = 1;
+          }
+          if (row + 1 < heightPx && layer[pixel + widthPx] !== own) {
+            isBorder[pixel] = isBorder[pixel + widthPx] = 1;
+          }
+        }
       }
     }
+    addSlots(this.samples, isBorder);
   }
 
-  /** Whether the first finer samples of a pixel and its middle show more than one steel. */
+  /** Whether the first finer samples of a border pixel and its middle show more than one steel. */
   private isMixed(pixel: number): boolean {
+    if (this.request.isUniform) return true;
     const { slot, layer, fineLayer } = this.samples;
     const at = (slot[pixel] as number) * MOST_SAMPLES;
-    if (at < 0) return false;
-    if (this.request.isUniform) return true;
     const own = this.steelOf(layer[pixel] as number);
     for (let sample = 0; sample < FIRST_SAMPLES; sample++) {
       if (this.steelOf(fineLayer[at + sample] as number) !== own) return true;

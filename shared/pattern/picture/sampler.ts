@@ -6,7 +6,7 @@ import { hasSlag, slagAt } from './fibre.js';
 import { HeldCoordinates } from './held.js';
 import { type PictureRequest, hasSamePlaces, hasSameTrace, sharedOps } from './request.js';
 import { MOST_SAMPLES, placesFor } from './sample-net.js';
-import { NO_METAL, type Samples, emptySamples } from './samples.js';
+import { NO_METAL, type Samples, emptySamples, slotOf } from './samples.js';
 
 /** Samples to take: of each a pixel, and −1 for its middle or the number of a finer one. */
 export interface Task {
@@ -25,19 +25,21 @@ export interface Counters {
   readonly reused: number;
 }
 
-const MIDDLE = [0.5, 0.5] as const;
-
 /** Takes the samples of one picture and notes what they found. */
 export class Sampler {
   readonly samples: Samples;
   readonly map: SurfaceMap;
   readonly engine: Engine;
   private readonly held: HeldCoordinates | null;
+  /** Of each layer, whether its steel has slag. */
   private readonly isSlag: Uint8Array;
+  private readonly hasSlag: boolean;
   private readonly across: Float64Array;
   private readonly up: Float64Array;
   private readonly metal: Uint8Array;
   private readonly slopes: Float32Array;
+  /** Where in the pixel a sample lies: the middle, then the finer ones; two numbers each. */
+  private readonly offsets: Float64Array;
   private readonly isSameTrace: boolean;
   /** Ops of the entry segment after which coordinates are held. */
   private readonly heldAt: number;
@@ -55,17 +57,19 @@ export class Sampler {
     const { program, steels, surface, blank, widthPx, heightPx } = request;
     this.map = surfaceMap(surface, program, blank);
     this.engine = tracer.engine;
-    this.samples = emptySamples(widthPx, heightPx);
     this.held = isHeld ? new HeldCoordinates(widthPx * heightPx, tracer.x instanceof Float64Array) : null;
     this.isSlag = Uint8Array.from(program.layerSteel, (steel) => {
       const found = steels[steel];
       return found && hasSlag(found) ? 1 : 0;
     });
+    this.hasSlag = this.isSlag.includes(1);
+    this.samples = emptySamples(widthPx, heightPx, { isFlat: this.map.isFlat, hasSlag: this.hasSlag });
     const { capacity } = tracer;
     this.across = new Float64Array(capacity);
     this.up = new Float64Array(capacity);
     this.metal = new Uint8Array(capacity);
     this.slopes = new Float32Array(capacity);
+    this.offsets = Float64Array.from([0.5, 0.5, ...placesFor(request.samples).flat()]);
     const isComparable =
       before !== null && hasSamePlaces(before.request, request) && before.engine === this.engine;
     this.isSameTrace = isComparable && hasSameTrace(before.request, request);
@@ -107,14 +111,24 @@ export class Sampler {
     for (let i = 0; i < task.count; i++) {
       const pixel = task.pixel[i] as number;
       const sample = task.sample[i] as number;
-      const slot = from.slot[pixel] as number;
+      const slot = slotOf(from, pixel);
       const at = slot * MOST_SAMPLES + sample;
       if (sample < 0 && from.isSampled[pixel] === 1) {
-        this.store(pixel, sample, from.layer[pixel] as number, from.slag[pixel] as number);
-        this.samples.slope[pixel] = from.slope[pixel] as number;
+        this.store(
+          pixel,
+          sample,
+          from.layer[pixel] as number,
+          this.hasSlag ? (from.slag[pixel] as number) : 0,
+        );
+        if (!this.map.isFlat) this.samples.slope[pixel] = from.slope[pixel] as number;
         this.reusedCount += 1;
       } else if (sample >= 0 && slot >= 0 && sample < (from.fineCount[slot] as number)) {
-        this.store(pixel, sample, from.fineLayer[at] as number, from.fineSlag[at] as number);
+        this.store(
+          pixel,
+          sample,
+          from.fineLayer[at] as number,
+          this.hasSlag ? (from.fineSlag[at] as number) : 0,
+        );
         this.reusedCount += 1;
       } else {
         task.pixel[left] = pixel;
@@ -137,7 +151,7 @@ export class Sampler {
     this.held.keep(
       pixel,
       sample,
-      this.samples.slot[pixel] as number,
+      slotOf(this.samples, pixel),
       x[0] as number,
       y[0] as number,
       z[0] as number,
@@ -157,7 +171,7 @@ export class Sampler {
     for (let i = 0; i < task.count; i++) {
       const pixel = task.pixel[i] as number;
       const sample = task.sample[i] as number;
-      const at = held.find(pixel, sample, from.slot[pixel] as number);
+      const at = held.find(pixel, sample, slotOf(from, pixel));
       if (at < 0) {
         task.pixel[left] = pixel;
         task.sample[left] = sample;
@@ -167,7 +181,7 @@ export class Sampler {
       held.load(sample < 0, at, tracer.x, tracer.y, tracer.z, known.count);
       known.pixel[known.count] = pixel;
       known.sample[known.count] = sample;
-      this.slopes[known.count] = sample < 0 ? (from.slope[pixel] as number) : 0;
+      if (sample < 0 && !this.map.isFlat) this.slopes[known.count] = from.slope[pixel] as number;
       known.count += 1;
     }
     task.count = left;
@@ -178,23 +192,23 @@ export class Sampler {
   }
 
   private traceWhole(task: Task): void {
-    const { tracer } = this;
+    const { tracer, offsets } = this;
     if (task.count === 0) return;
     const { widthPx, heightPx } = this.samples;
     const { left, bottom, right, top } = this.request.window ?? WHOLE;
-    const places = placesFor(this.request.samples);
+    const stepAcross = (right - left) / widthPx;
+    const stepDown = (top - bottom) / heightPx;
     for (let i = 0; i < task.count; i++) {
       const pixel = task.pixel[i] as number;
-      const sample = task.sample[i] as number;
-      const column = pixel % widthPx;
-      const row = (pixel - column) / widthPx;
-      const [inX, inY] = sample < 0 ? MIDDLE : (places[sample] as (typeof places)[number]);
-      this.across[i] = left + ((column + inX) / widthPx) * (right - left);
-      this.up[i] = top - ((row + inY) / heightPx) * (top - bottom);
+      const place = 2 * ((task.sample[i] as number) + 1);
+      const row = Math.floor(pixel / widthPx);
+      const column = pixel - row * widthPx;
+      this.across[i] = left + (column + (offsets[place] as number)) * stepAcross;
+      this.up[i] = top - (row + (offsets[place + 1] as number)) * stepDown;
     }
     const points = { x: tracer.x, y: tracer.y, z: tracer.z, isMetal: this.metal, slope: this.slopes };
     this.map.place(this.across, this.up, task.count, points);
-    this.leaveOutEmpty(task);
+    if (!this.map.isFlat) this.leaveOutEmpty(task);
     if (task.count === 0) return;
     this.evaluations += tracer.begin(task.count, this.heldAt);
     this.traceOn(task);
@@ -226,21 +240,8 @@ export class Sampler {
 
   /** From where coordinates are held to the stacks; notes what was found. */
   private traceOn({ pixel, sample, count }: Task): void {
-    const { tracer, held } = this;
-    if (held) {
-      for (let i = 0; i < count; i++) {
-        const p = pixel[i] as number;
-        const slot = this.samples.slot[p] as number;
-        held.keep(
-          p,
-          sample[i] as number,
-          slot,
-          tracer.x[i] as number,
-          tracer.y[i] as number,
-          tracer.z[i] as number,
-        );
-      }
-    }
+    const { tracer, samples } = this;
+    if (this.held) this.hold(this.held, pixel, sample, count);
     this.evaluations += tracer.run(count, this.heldAt);
     this.sampleCount += count;
     for (let i = 0; i < count; i++) {
@@ -249,9 +250,20 @@ export class Sampler {
         this.isSlag[layer] === 1
           ? slagAt(tracer.x[i] as number, tracer.y[i] as number, tracer.z[i] as number, layer)
           : 0;
+      this.store(pixel[i] as number, sample[i] as number, layer, slag);
+    }
+    if (this.map.isFlat) return;
+    for (let i = 0; i < count; i++) {
+      if ((sample[i] as number) < 0) samples.slope[pixel[i] as number] = this.slopes[i] as number;
+    }
+  }
+
+  private hold(held: HeldCoordinates, pixel: Int32Array, sample: Int8Array, count: number): void {
+    const { x, y, z } = this.tracer;
+    for (let i = 0; i < count; i++) {
       const p = pixel[i] as number;
-      this.store(p, sample[i] as number, layer, slag);
-      if ((sample[i] as number) < 0) this.samples.slope[p] = this.slopes[i] as number;
+      const slot = slotOf(this.samples, p);
+      held.keep(p, sample[i] as number, slot, x[i] as number, y[i] as number, z[i] as number);
     }
   }
 
@@ -259,13 +271,13 @@ export class Sampler {
     const { samples } = this;
     if (sample < 0) {
       samples.layer[pixel] = layer;
-      samples.slag[pixel] = slag;
+      if (this.hasSlag) samples.slag[pixel] = slag;
       samples.isSampled[pixel] = 1;
       return;
     }
     const slot = samples.slot[pixel] as number;
     samples.fineLayer[slot * MOST_SAMPLES + sample] = layer;
-    samples.fineSlag[slot * MOST_SAMPLES + sample] = slag;
-    samples.fineCount[slot] = Math.max(samples.fineCount[slot] as number, sample + 1);
+    if (this.hasSlag) samples.fineSlag[slot * MOST_SAMPLES + sample] = slag;
+    if (sample >= (samples.fineCount[slot] as number)) samples.fineCount[slot] = sample + 1;
   }
 }

@@ -55,7 +55,10 @@ export function encode(op: TraceOp, unevenness: Unevenness): EncodedOp | null {
       };
     case 'twist': {
       const quartersPerMm = op.radPerMm / (Math.PI / 2);
-      return { code: OP.twist, params: [op.widthMm / 2, op.thicknessMm / 2, quartersPerMm, op.reversalMm] };
+      return {
+        code: OP.twist,
+        params: [op.widthMm / 2, op.thicknessMm / 2, quartersPerMm, op.reversalMm, op.isReversed ? 1 : 0],
+      };
     }
     case 'corner':
       return { code: OP.corner, params: [op.widthMm / 2, op.thicknessMm / 2] };
@@ -136,9 +139,9 @@ function unevenParams(op: UnevenOp, { strength, waves }: Unevenness): readonly n
     4 * flatMm(widthMm),
     4 * strength * UNEVEN_SHARE * thicknessMm,
     ...waves.flatMap((wave, i) => [
-      4 * wave.turnsPerMmX,
-      4 * wave.turnsPerMmY,
-      4 * wave.startTurns,
+      wave.turnsPerMmX,
+      wave.turnsPerMmY,
+      wave.startTurns,
       WAVE_WEIGHTS[i] as number,
     ]),
   ];

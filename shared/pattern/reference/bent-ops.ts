@@ -1,7 +1,7 @@
 import { latticeHash } from '../../steps/index.js';
-import { WAVES } from '../program/waves.js';
+import { WAVES, waveAt } from '../program/waves.js';
 import type { OpBack } from './solid-ops.js';
-import { halfQuarterSine, ringSine, turnPoint } from './turn-section.js';
+import { turnPoint, turnPointByHalf } from './turn-section.js';
 
 /** Ops that bend: each takes points `from` to `to` (excluded) one op back, in place. */
 
@@ -10,16 +10,18 @@ export const twistBack: OpBack = ({ x, y, z }, params, at, from, to) => {
   const halfThickness = params[at + 1] as number;
   const quartersPerMm = params[at + 2] as number;
   const reversal = params[at + 3] as number;
+  const isReversed = params[at + 4] !== 0;
   for (let i = from; i < to; i++) {
-    const xi = x[i] as number;
-    const cycle = xi - 2 * reversal * Math.floor(xi / (2 * reversal));
-    const turned = quartersPerMm * (reversal - Math.abs(cycle - reversal));
+    let turning = x[i] as number;
+    if (isReversed) {
+      const inCycle = turning - 2 * reversal * Math.floor(turning / (2 * reversal));
+      turning = reversal - Math.abs(inCycle - reversal);
+    }
+    const turned = quartersPerMm * turning;
     const quarters = Math.round(turned);
-    const yi = clamped((y[i] as number) / halfWidth - 1);
-    const zi = clamped((z[i] as number) / halfThickness - 1);
-    y[i] = yi;
-    z[i] = zi;
-    turnPoint(y, z, i, ringSine(turned - quarters, (1 - yi * yi) * (1 - zi * zi)), quarters);
+    y[i] = clamped((y[i] as number) / halfWidth - 1);
+    z[i] = clamped((z[i] as number) / halfThickness - 1);
+    turnPoint(y, z, i, turned - quarters, quarters);
     y[i] = ((y[i] as number) + 1) * halfWidth;
     z[i] = ((z[i] as number) + 1) * halfThickness;
   }
@@ -29,11 +31,9 @@ export const cornerBack: OpBack = ({ y, z }, params, at, from, to) => {
   const halfWidth = params[at] as number;
   const halfThickness = params[at + 1] as number;
   for (let i = from; i < to; i++) {
-    const yi = clamped((y[i] as number) / halfWidth - 1);
-    const zi = clamped((z[i] as number) / halfThickness - 1);
-    y[i] = yi;
-    z[i] = zi;
-    turnPoint(y, z, i, halfQuarterSine((1 - yi * yi) * (1 - zi * zi)), 0);
+    y[i] = clamped((y[i] as number) / halfWidth - 1);
+    z[i] = clamped((z[i] as number) / halfThickness - 1);
+    turnPointByHalf(y, z, i);
     y[i] = ((y[i] as number) + 1) * halfWidth;
     z[i] = ((z[i] as number) + 1) * halfThickness;
   }
@@ -141,11 +141,9 @@ export const unevenBack: OpBack = ({ x, y, z }, params, at, from, to) => {
     let drift = 0;
     for (let wave = 0; wave < WAVES; wave++) {
       const w = at + 6 + wave * waveWords;
-      const quarters =
-        xi * (params[w] as number) + yi * (params[w + 1] as number) + (params[w + 2] as number);
-      const angle = (quarters * Math.PI) / 2;
-      lift += (params[w + 3] as number) * Math.sin(angle);
-      if (wave === 0) drift = Math.cos(angle);
+      const turns = xi * (params[w] as number) + yi * (params[w + 1] as number) + (params[w + 2] as number);
+      lift += (params[w + 3] as number) * waveAt(turns);
+      if (wave === 0) drift = waveAt(turns + 0.25);
     }
     // Nothing moves across the faces: the displacement along each axis is none at both ends of it.
     const u = xi * (params[at] as number);

@@ -95,6 +95,7 @@ export function bladeMap(blade: Blade, side: 'left' | 'right', bar: Size): Surfa
   return {
     widthMm: lengthMm,
     heightMm: widthMm,
+    isFlat: false,
     place: (across, up, count, { x, y, z, isMetal, slope }) => {
       for (let i = 0; i < count; i++) {
         const along = across[i] as number;

@@ -17,7 +17,8 @@ export function flatMap(surface: Exclude<Surface, { kind: 'blade' }>, bar: Size)
   return {
     widthMm: Math.hypot(...across),
     heightMm: Math.hypot(...up),
-    place: (a, b, count, { x, y, z, isMetal, slope }) => {
+    isFlat: true,
+    place: (a, b, count, { x, y, z }) => {
       for (let i = 0; i < count; i++) {
         const ai = a[i] as number;
         const bi = b[i] as number;
@@ -25,8 +26,6 @@ export function flatMap(surface: Exclude<Surface, { kind: 'blade' }>, bar: Size)
         y[i] = corner[1] + ai * across[1] + bi * up[1];
         z[i] = corner[2] + ai * across[2] + bi * up[2];
       }
-      isMetal.fill(1, 0, count);
-      slope.fill(0, 0, count);
     },
   };
 }

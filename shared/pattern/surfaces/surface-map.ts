@@ -45,7 +45,7 @@ export function surfacePoints(map: SurfaceMap, widthPx: number, heightPx: number
     x: new Float64Array(count),
     y: new Float64Array(count),
     z: new Float64Array(count),
-    isMetal: new Uint8Array(count),
+    isMetal: new Uint8Array(count).fill(1),
   };
   map.place(across, up, count, { ...points, slope: new Float32Array(count) });
   return points;

@@ -42,6 +42,8 @@ export interface SurfaceMap {
   /** Size of what the whole picture shows, mm. */
   readonly widthMm: number;
   readonly heightMm: number;
+  /** Whether the whole picture is flat metal: then `place` leaves `isMetal` and `slope` as they are. */
+  readonly isFlat: boolean;
   /**
    * Puts the points for `count` places of the picture.
    * @param across 0–1 from the left edge

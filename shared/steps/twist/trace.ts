@@ -12,6 +12,7 @@ export function traceTwist(step: Twist, earlier: BarState): readonly TraceOp[] {
       thicknessMm,
       radPerMm: (hand * 2 * Math.PI * step.turns) / lengthMm,
       reversalMm: lengthMm / (step.reversals + 1),
+      isReversed: step.reversals > 0,
     },
   ];
 }

@@ -1,3 +1,4 @@
+import { HALF, HUGE, PER_WORD } from './constants';
 import { Lanes } from './lanes';
 import { Round } from './round';
 
@@ -17,8 +18,8 @@ class Lattice {
   /** How far off its place, in pitches: ±½·stray for a number from 0 to 65 535. */
   @inline
   static stray<T>(bits: v128, stray: v128): v128 {
-    const share = v128.mul<T>(Lanes.fromInteger<T>(bits), Lanes.all<T>(1.0 / 65535.0));
-    return v128.mul<T>(v128.sub<T>(share, Lanes.all<T>(0.5)), stray);
+    const share = v128.mul<T>(Lanes.fromInteger<T>(bits), Lanes.constant<T>(PER_WORD));
+    return v128.mul<T>(v128.sub<T>(share, Lanes.constant<T>(HALF)), stray);
   }
 }
 
@@ -37,7 +38,7 @@ function nearest2<T>(params: usize, x: v128, y: v128, shift: f64): v128 {
   const row = v128.mul<T>(v128.sub<T>(y, Lanes.param<T>(params, 12)), Lanes.param<T>(params, 10));
   const column = v128.sub<T>(v128.mul<T>(x, Lanes.param<T>(params, 8)), Lanes.all<T>(0.5 + shift));
   const middleRow = v128.nearest<T>(row);
-  let nearest = Lanes.all<T>(1e30);
+  let nearest = Lanes.constant<T>(HUGE);
   for (let dj = -rowReach; dj <= rowReach; dj++) {
     const j = v128.add<T>(middleRow, Lanes.all<T>(dj as f64));
     const inRow = v128.sub<T>(column, v128.and(Lanes.isOdd<T>(j), stagger));

@@ -1,4 +1,5 @@
 import { cornerBack, grooveBack, twistBack, unevenBack, wedgeBack } from './bent-ops';
+import { layConstants } from './constants';
 import { dimpleBack } from './dimple';
 import { affineBack, foldBack, restackBack, sliceBack } from './solid-ops';
 
@@ -32,6 +33,7 @@ const ALONG_WIDTH: i32 = 1;
 
 /** Where everything lies; `header` holds thirteen addresses in the order of the variables above. */
 export function prepare(header: usize): void {
+  layConstants();
   codeAt = load<u32>(header);
   paramsAt = load<u32>(header, 4);
   segmentsAt = load<u32>(header, 8);

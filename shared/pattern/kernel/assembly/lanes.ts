@@ -1,13 +1,32 @@
+import {
+  BELLY,
+  EIGHT,
+  HALF,
+  LEAST_EXPONENT,
+  PER_LN2,
+  POWER,
+  ROUNDER,
+  SINE,
+  SIXTEEN,
+  constantAt,
+} from './constants';
+
 /**
  * Arithmetic on one vector of numbers: four of single precision or two of double, as `T` says. No table is looked up
- * anywhere; sine, cosine and exponential are polynomials (Taylor series about 0, on an interval so short that their
- * last term left out is below the rounding of `T`).
+ * by what a sample holds; sine, cosine and exponential are polynomials on an interval so short that their error is below the
+ * rounding of `T`.
  */
 export class Lanes {
   /** The same number in every lane. */
   @inline
   static all<T>(value: f64): v128 {
     return v128.splat<T>(value as T);
+  }
+
+  /** One of the numbers of `constants` in every lane. */
+  @inline
+  static constant<T>(index: i32): v128 {
+    return v128.load_splat<T>(constantAt<T>(index));
   }
 
   /** Parameter `index` of an op in every lane. */
@@ -24,14 +43,28 @@ export class Lanes {
   /** All bits set in the lanes where the whole number `value` is odd. */
   @inline
   static isOdd<T>(value: v128): v128 {
-    const half = v128.mul<T>(value, Lanes.all<T>(0.5));
+    const half = v128.mul<T>(value, Lanes.constant<T>(HALF));
     return v128.ne<T>(half, v128.floor<T>(half));
   }
 
-  /** a·b + c. */
+  /** The next term of a polynomial: sum·x + constant `index`. */
   @inline
-  static fma<T>(a: v128, b: v128, c: f64): v128 {
-    return v128.add<T>(v128.mul<T>(a, b), Lanes.all<T>(c));
+  static term<T>(sum: v128, x: v128, index: i32): v128 {
+    return v128.add<T>(v128.mul<T>(sum, x), Lanes.constant<T>(index));
+  }
+
+  /** Bit 0 or 1 of whole numbers, added to the constant ROUNDER, as the sign bit of each lane; the other bits are 0. */
+  @inline
+  static bitToSign<T>(rounded: v128, bit: i32): v128 {
+    if (sizeof<T>() === 8) return i64x2.shl(i64x2.shr_u(rounded, bit), 63);
+    return i32x4.shl(i32x4.shr_u(rounded, bit), 31);
+  }
+
+  /** All bits of the lanes whose sign bit is set. */
+  @inline
+  static signToMask<T>(sign: v128): v128 {
+    if (sizeof<T>() === 8) return i64x2.sub(i64x2.splat(0), i64x2.shr_u(sign, 63));
+    return i32x4.shr_s(sign, 31);
   }
 
   /** sin(90°·t) for −½ ≤ t ≤ ½. */
@@ -40,71 +73,60 @@ export class Lanes {
     const s = v128.mul<T>(t, t);
     let sum: v128;
     if (sizeof<T>() === 8) {
-      sum = Lanes.fma<T>(s, Lanes.all<T>(-6.688035109811467e-10), 5.692172921967926e-8);
-      sum = Lanes.fma<T>(sum, s, -3.598843235212085e-6);
-      sum = Lanes.fma<T>(sum, s, 1.6044118478735982e-4);
+      sum = Lanes.term<T>(Lanes.constant<T>(SINE), s, SINE + 1);
+      sum = Lanes.term<T>(sum, s, SINE + 2);
+      sum = Lanes.term<T>(sum, s, SINE + 3);
+      sum = Lanes.term<T>(sum, s, SINE + 4);
     } else {
-      sum = Lanes.all<T>(1.6044118478735982e-4);
+      sum = Lanes.constant<T>(SINE + 4);
     }
-    sum = Lanes.fma<T>(sum, s, -0.004681754135318687);
-    sum = Lanes.fma<T>(sum, s, 0.07969262624616704);
-    sum = Lanes.fma<T>(sum, s, -0.6459640975062462);
-    sum = Lanes.fma<T>(sum, s, 1.5707963267948966);
+    sum = Lanes.term<T>(sum, s, SINE + 5);
+    sum = Lanes.term<T>(sum, s, SINE + 6);
+    sum = Lanes.term<T>(sum, s, SINE + 7);
     return v128.mul<T>(sum, t);
   }
 
-  /** cos(90°·t) for −½ ≤ t ≤ ½. */
+  /** The form of the hammer's waves; see `shared/pattern/program/waves.ts`. */
   @inline
-  static cosineOfQuarters<T>(t: v128): v128 {
-    const s = v128.mul<T>(t, t);
-    let sum: v128;
-    if (sizeof<T>() === 8) {
-      sum = Lanes.fma<T>(s, Lanes.all<T>(6.565963114979472e-11), -6.386603083791847e-9);
-      sum = Lanes.fma<T>(sum, s, 4.710874778818172e-7);
-      sum = Lanes.fma<T>(sum, s, -2.5202042373060605e-5);
-      sum = Lanes.fma<T>(sum, s, 9.192602748394266e-4);
-    } else {
-      sum = Lanes.fma<T>(s, Lanes.all<T>(-2.5202042373060605e-5), 9.192602748394266e-4);
-    }
-    sum = Lanes.fma<T>(sum, s, -0.02086348076335296);
-    sum = Lanes.fma<T>(sum, s, 0.253669507901048);
-    sum = Lanes.fma<T>(sum, s, -1.2337005501361697);
-    return Lanes.fma<T>(sum, s, 1);
-  }
-
-  /** sin(90°·(whole + t)) from the two values at t, |t| ≤ ½. */
-  @inline
-  static quadrant<T>(whole: v128, sine: v128, cosine: v128): v128 {
-    const value = v128.bitselect(cosine, sine, Lanes.isOdd<T>(whole));
-    const isNegative = Lanes.isOdd<T>(v128.floor<T>(v128.mul<T>(whole, Lanes.all<T>(0.5))));
-    return v128.bitselect(v128.neg<T>(value), value, isNegative);
+  static wave<T>(turns: v128): v128 {
+    const rounder = Lanes.constant<T>(ROUNDER);
+    const t = v128.sub<T>(turns, v128.sub<T>(v128.add<T>(turns, rounder), rounder));
+    const left = v128.sub<T>(
+      Lanes.constant<T>(EIGHT),
+      v128.mul<T>(Lanes.constant<T>(SIXTEEN), v128.abs<T>(t)),
+    );
+    const f = v128.mul<T>(t, left);
+    const belly = v128.mul<T>(Lanes.constant<T>(BELLY), v128.abs<T>(f));
+    return v128.mul<T>(f, v128.add<T>(belly, Lanes.constant<T>(BELLY + 1)));
   }
 
   /** eˣ for x ≤ 0. */
   @inline
   static exponential<T>(x: v128): v128 {
-    const least: f64 = sizeof<T>() === 8 ? -1020 : -124;
-    const binary = v128.pmax<T>(Lanes.all<T>(least), v128.mul<T>(x, Lanes.all<T>(1.4426950408889634)));
+    const binary = v128.pmax<T>(
+      Lanes.constant<T>(LEAST_EXPONENT),
+      v128.mul<T>(x, Lanes.constant<T>(PER_LN2)),
+    );
     const whole = v128.nearest<T>(binary);
     const f = v128.sub<T>(binary, whole);
     let sum: v128;
     if (sizeof<T>() === 8) {
-      sum = Lanes.fma<T>(f, Lanes.all<T>(1.3691488853904124e-12), 2.5678435993488196e-11);
-      sum = Lanes.fma<T>(sum, f, 4.445538271870812e-10);
-      sum = Lanes.fma<T>(sum, f, 7.054911620801121e-9);
-      sum = Lanes.fma<T>(sum, f, 1.0178086009239696e-7);
-      sum = Lanes.fma<T>(sum, f, 1.3215486790144305e-6);
-      sum = Lanes.fma<T>(sum, f, 1.525273380405984e-5);
+      sum = Lanes.term<T>(Lanes.constant<T>(POWER), f, POWER + 1);
+      sum = Lanes.term<T>(sum, f, POWER + 2);
+      sum = Lanes.term<T>(sum, f, POWER + 3);
+      sum = Lanes.term<T>(sum, f, POWER + 4);
+      sum = Lanes.term<T>(sum, f, POWER + 5);
+      sum = Lanes.term<T>(sum, f, POWER + 6);
     } else {
-      sum = Lanes.all<T>(1.525273380405984e-5);
+      sum = Lanes.constant<T>(POWER + 6);
     }
-    sum = Lanes.fma<T>(sum, f, 1.5403530393381606e-4);
-    sum = Lanes.fma<T>(sum, f, 0.0013333558146428441);
-    sum = Lanes.fma<T>(sum, f, 0.009618129107628477);
-    sum = Lanes.fma<T>(sum, f, 0.05550410866482158);
-    sum = Lanes.fma<T>(sum, f, 0.2402265069591007);
-    sum = Lanes.fma<T>(sum, f, 0.6931471805599453);
-    sum = Lanes.fma<T>(sum, f, 1);
+    sum = Lanes.term<T>(sum, f, POWER + 7);
+    sum = Lanes.term<T>(sum, f, POWER + 8);
+    sum = Lanes.term<T>(sum, f, POWER + 9);
+    sum = Lanes.term<T>(sum, f, POWER + 10);
+    sum = Lanes.term<T>(sum, f, POWER + 11);
+    sum = Lanes.term<T>(sum, f, POWER + 12);
+    sum = Lanes.term<T>(sum, f, POWER + 13);
     return v128.mul<T>(sum, Lanes.powerOfTwo<T>(whole));
   }
 
