@@ -26,7 +26,7 @@ export function node(args, options = {}) {
 }
 
 /** The longest that anything here may take, ms; what takes longer hangs. */
-const patienceMs = 12 * 60_000;
+const patienceMs = 30 * 60_000;
 
 /**
  * Runs a program to its end and collects what it prints.
