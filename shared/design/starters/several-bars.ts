@@ -108,7 +108,8 @@ export const fiveBars: Starter = {
         ],
       ),
     ],
-    { lengthMm: 200, widthMm: 54, thicknessMm: 5.5 },
+    // The edge bar is the last one, on the right.
+    { lengthMm: 200, widthMm: 54, thicknessMm: 5.5, edge: 'right' },
   ),
 };
 
