@@ -3,29 +3,15 @@
  * the median of the rounds with their quartiles; a run whose A/A pair strays past 0.9–1.1 is void. Counted work is exact.
  * Nothing here is a test: the counters are asserted in the specs.
  */
-import { build } from 'esbuild';
-import { mkdirSync } from 'node:fs';
-import { join } from 'node:path';
-import { pathToFileURL } from 'node:url';
+import { tsImport } from 'tsx/esm/api';
 import { buildKernel } from './build.mjs';
-import { root, stopWith } from './command.mjs';
+import { stopWith } from './command.mjs';
 
 const ROUNDS = 11;
-const outDir = join(root, 'dist/bench');
 
 const kernelBuilt = await buildKernel();
 if (kernelBuilt.code !== 0) stopWith(kernelBuilt.output);
-mkdirSync(outDir, { recursive: true });
-const outfile = join(outDir, 'pattern.mjs');
-await build({
-  entryPoints: [join(root, 'shared/pattern/testing/workloads.ts')],
-  outfile,
-  bundle: true,
-  format: 'esm',
-  target: 'es2022',
-  logLevel: 'error',
-});
-const { workloads } = await import(pathToFileURL(outfile).href);
+const { workloads } = await tsImport('../shared/pattern/testing/workloads.ts', import.meta.url);
 const { engines, pictures, counts } = workloads();
 
 /** Milliseconds of processor time that `run` takes: what a machine with nothing else to do would need. */

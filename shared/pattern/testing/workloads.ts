@@ -47,14 +47,20 @@ function engineLoads(kernel: Kernel): Workloads['engines'] {
   const x = Float64Array.from({ length: SAMPLES }, () => random() * program.lengthMm);
   const y = Float64Array.from({ length: SAMPLES }, () => random() * program.widthMm);
   const z = Float64Array.from({ length: SAMPLES }, () => random() * program.thicknessMm);
-  const traced = (tracer: Tracer) => (): void => {
-    for (let from = 0; from < SAMPLES; from += tracer.capacity) {
-      const to = Math.min(SAMPLES, from + tracer.capacity);
-      tracer.x.set(x.subarray(from, to));
-      tracer.y.set(y.subarray(from, to));
-      tracer.z.set(z.subarray(from, to));
-      tracer.run(to - from);
-    }
+  const traced = (tracer: Tracer): (() => void) => {
+    // Each engine gets its points in its own precision.
+    const own = (numbers: Float64Array): Float32Array | Float64Array =>
+      tracer.x instanceof Float32Array ? Float32Array.from(numbers) : numbers;
+    const [ownX, ownY, ownZ] = [own(x), own(y), own(z)];
+    return () => {
+      for (let from = 0; from < SAMPLES; from += tracer.capacity) {
+        const to = Math.min(SAMPLES, from + tracer.capacity);
+        tracer.x.set(ownX.subarray(from, to));
+        tracer.y.set(ownY.subarray(from, to));
+        tracer.z.set(ownZ.subarray(from, to));
+        tracer.run(to - from);
+      }
+    };
   };
   const back = fifteenClosures();
   const noise = simplexNoise(1);
